@@ -1,0 +1,29 @@
+import type { Action } from '~/people/permission'
+import type { Move } from '~/lib/moves'
+
+export const noticeKinds = [
+  'first_warning',
+  'hazard',
+  'works',
+  'please_do_not_climb',
+  'owner_forbids',
+  'closed_in_law',
+] as const
+export type NoticeKind = (typeof noticeKinds)[number]
+
+export const noticeKindWords: Record<NoticeKind, string> = {
+  first_warning: 'First warning',
+  hazard: 'Hazard',
+  works: 'Works',
+  please_do_not_climb: 'Please do not climb (agreed)',
+  owner_forbids: 'Owner forbids',
+  closed_in_law: 'Closed in law',
+}
+
+export const noticeStates = ['draft', 'published', 'withdrawn'] as const
+export type NoticeState = (typeof noticeStates)[number]
+
+export const noticeMoves: readonly Move<NoticeState, Action>[] = [
+  { from: 'draft', to: 'published', may: 'notice:manage' },
+  { from: 'published', to: 'withdrawn', may: 'notice:manage' },
+]
