@@ -19,7 +19,7 @@ export function tileCutter(layers: GroundLayer[]): Cutter {
     const found: Record<string, GeoJSONVTTile> = {}
     for (const { name, fromZoom, index } of indexed) {
       const whole = z < fromZoom ? null : index.getTile(z, x, y)
-      const tile = whole && { ...whole, features: whole.features.filter(hasExtent) }
+      const tile = whole && ({ ...whole, features: whole.features.filter(hasExtent) } as GeoJSONVTTile)
       if (!tile || tile.features.length === 0) continue
       const already = found[name]
       found[name] = already ? { ...already, features: [...already.features, ...tile.features] } : tile

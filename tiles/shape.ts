@@ -1,6 +1,13 @@
 /** A place on the island's own sheet: metres east and north of its middle. */
 export type Metres = [east: number, north: number]
 
+/** Points written as `east,north east,north …` in whole metres. */
+export const traced = (points: string): Metres[] =>
+  points
+    .trim()
+    .split(/\s+/)
+    .map(point => point.split(',').map(Number) as Metres)
+
 const between = (a: number, b: number, c: number, d: number, t: number) =>
   0.5 * (2 * b + (c - a) * t + (2 * a - 5 * b + 4 * c - d) * t * t + (3 * b - a - 3 * c + d) * t * t * t)
 

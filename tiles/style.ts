@@ -1,6 +1,9 @@
 import type { StyleSpecification } from 'maplibre-gl'
 import { type GroundPalette, groundPalettes } from './palette'
-import { heightLayers, landLayers, nameLayers, seaLayers, wayLayers } from './style-layers'
+import { heightLayers, landLayers } from './style-land'
+import { nameLayers } from './style-names'
+import { seaLayers } from './style-sea'
+import { wayLayers } from './style-ways'
 
 /** Absolute addresses of the shipped font files for one face: basic Latin, and its extension where there is one. */
 export interface FontFiles {
