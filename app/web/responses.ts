@@ -1,4 +1,5 @@
 import { data } from 'react-router'
+import { isDatabaseAway } from './database-away'
 
 export type Typed = Record<string, string | string[]>
 
@@ -36,6 +37,16 @@ export const awaySentence =
 /** 503: the database is away; the form stands as it was typed. */
 export function away(typed: Typed = {}) {
   return answer(503, { errors: {}, typed, reason: awaySentence })
+}
+
+/** Runs an action's work; when the database is away the answer is the form as it was typed (503). */
+export async function orAway<T>(typed: Typed, work: () => Promise<T>) {
+  try {
+    return await work()
+  } catch (error) {
+    if (isDatabaseAway(error)) return away(typed)
+    throw error
+  }
 }
 
 /** To be thrown: what the whole page answers when there is nothing to show, with a sentence in `data.reason`. */

@@ -1,5 +1,5 @@
 import { expect, test } from 'vitest'
-import { toReturnPath } from '~/people/return-path'
+import { toReturnPath, toReturnQuery } from '~/people/return-path'
 
 test('a path of ours is gone back to with its query and mark', () => {
   expect(toReturnPath('/crags/gannet-wall-KC7FQ2X?view=list#a3')).toBe(
@@ -27,4 +27,10 @@ test.each([
 
 test('a page whose name only begins like signing in is one of ours', () => {
   expect(toReturnPath('/sign-inside')).toBe('/sign-inside')
+})
+
+test('the way back goes along through signing in only when it is one of ours', () => {
+  expect(toReturnQuery('/hazards?band=first')).toBe('?to=%2Fhazards%3Fband%3Dfirst')
+  expect(toReturnQuery('https://evil.example')).toBe('')
+  expect(toReturnQuery(null)).toBe('')
 })
