@@ -3,7 +3,7 @@ import { fromGeojsonVt } from '@maplibre/vt-pbf'
 import type { Feature } from 'geojson'
 import type { GroundLayer } from './ground'
 
-const options = { maxZoom: 14, indexMaxZoom: 7, indexMaxPoints: 0, extent: 4096, buffer: 96, tolerance: 4 }
+const options = { maxZoom: 14, indexMaxZoom: 7, indexMaxPoints: 0, extent: 4096, buffer: 96, tolerance: 1 }
 
 /** An encoded vector tile, or null where there is nothing. */
 export type Cutter = (z: number, x: number, y: number) => Uint8Array | null

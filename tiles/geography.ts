@@ -12,11 +12,6 @@ export function toLonLat([east, north]: Metres): Position {
   return [round(middle.lon + east / metresPerDegreeEast), round(middle.lat + north / metresPerDegree)]
 }
 
-/** The inverse of toLonLat. */
-export function toMetres(lon: number, lat: number): Metres {
-  return [(lon - middle.lon) * metresPerDegreeEast, (lat - middle.lat) * metresPerDegree]
-}
-
 type Facts = Record<string, string | number | boolean>
 
 export const lineFeature = (line: Metres[], properties: Facts = {}): Feature<LineString> => ({

@@ -90,7 +90,7 @@ function cliffs(relief: Relief): Feature[] {
 }
 
 /** Tops of the sea cliffs: 18 m behind the shore wherever the land there is 18 m high or more. */
-export function seaCliffs(relief: Relief): Metres[][] {
+function seaCliffs(relief: Relief): Metres[][] {
   const land = mapRaster(relief.sea, index => -relief.sea.values[index]!)
   return areasAbove(land, 18)
     .flat()
@@ -105,7 +105,7 @@ export function seaCliffs(relief: Relief): Metres[][] {
 }
 
 /** The worked faces of the quarries, all but the mouth. */
-export function quarryFaces(relief: Relief): { name: string; line: Metres[] }[] {
+function quarryFaces(relief: Relief): { name: string; line: Metres[] }[] {
   return relief.pits.map(({ name, ring }, i) => {
     const { at, turn, mouth } = quarries[i]!
     const open = (place: Metres) => {
@@ -120,7 +120,7 @@ export function quarryFaces(relief: Relief): { name: string; line: Metres[] }[] 
 }
 
 /** The gritstone edge, which falls to the south. */
-export function gritEdge(): Metres[] {
+function gritEdge(): Metres[] {
   const smooth = cutCorners(cutCorners(edge.line, false), false)
   return withOnRight(smooth, ([, north]) => -north)
 }

@@ -30,7 +30,7 @@ function contourLines({ height, sea, pits, tarn }: Relief): Feature[] {
   for (let ele = 10; ele < highest; ele += 10)
     for (const ring of areasAbove(height, ele).flat())
       for (const line of keepWhere(ring, shown))
-        if (lengthOf(line) > 260) features.push(lineFeature(line, { ele, index: ele % 50 === 0 }))
+        if (lengthOf(line) > 520) features.push(lineFeature(line, { ele, index: ele % 50 === 0 }))
   return features
 }
 

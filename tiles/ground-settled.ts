@@ -61,7 +61,7 @@ function coastPath({ sea }: Relief): Metres[][] {
 function placeNames(): Feature[] {
   return settlements
     .toSorted((a, b) => b.population - a.population)
-    .map(({ at, kind, name, population }) => pointFeature(at, { kind, ...named(name), population }))
+    .map(({ label, kind, name, population }) => pointFeature(label, { kind, ...named(name), population }))
 }
 
 /** Houses along the roads through each village, none in the sea or on another. */

@@ -1,8 +1,8 @@
 /** A place on the ground of Skerrow, longitude and latitude on WGS 84. */
-export type Place = [lon: number, lat: number]
+type Place = [lon: number, lat: number]
 
 /** Where a crag of the invented island lies: its mark, and the top of its face from one end to the other. */
-export interface CragPlace {
+interface CragPlace {
   area: 'Keld Cliffs' | 'Harrow Fell'
   lon: number
   lat: number
@@ -124,5 +124,3 @@ export const cragPlaces = {
     ],
   },
 } satisfies Record<string, CragPlace>
-
-export type CragName = keyof typeof cragPlaces

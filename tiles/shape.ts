@@ -41,7 +41,9 @@ export function cutCorners(line: Metres[], closed: boolean): Metres[] {
   return out
 }
 
-/** The stretches of a line where `depth` is above 0, ended exactly where it passes through 0. */
+const isSame = (a: Metres, b: Metres) => a[0] === b[0] && a[1] === b[1]
+
+/** The stretches of a line where `depth` is above 0, ended exactly where it passes through 0; a ring's start cuts none. */
 export function keepWhere(line: Metres[], depth: (at: Metres) => number): Metres[][] {
   const out: Metres[][] = []
   let run: Metres[] = []
@@ -64,6 +66,9 @@ export function keepWhere(line: Metres[], depth: (at: Metres) => number): Metres
     before = here
   }
   if (run.length > 0) out.push(run)
+  const [first, last] = [out[0], out.at(-1)]
+  if (first && last && first !== last && isSame(first[0]!, line[0]!) && isSame(last.at(-1)!, line[0]!))
+    out.splice(0, 1, [...out.pop()!, ...first.slice(1)])
   return out.filter(piece => piece.length > 1)
 }
 

@@ -151,13 +151,27 @@ export interface Named {
   at: Metres
 }
 
-/** People's places by Shortbread's kind. */
-export const settlements: (Named & { kind: 'village' | 'hamlet'; population: number; houses: number })[] = [
-  { kind: 'village', name: 'Farnholm', at: [3720, 930], population: 410, houses: 70 },
-  { kind: 'village', name: 'Upper Keld', at: [-420, -470], population: 160, houses: 34 },
-  { kind: 'hamlet', name: 'Nether Keld', at: [-2820, -1430], population: 60, houses: 16 },
-  { kind: 'hamlet', name: 'Skarth', at: [-2160, 2480], population: 45, houses: 12 },
-  { kind: 'hamlet', name: 'Auksey', at: [3330, -1410], population: 30, houses: 10 },
+/** A place where people live, by Shortbread's kind; its name stands at `label`, clear of its roads. */
+export interface Settlement extends Named {
+  kind: 'village' | 'hamlet'
+  label: Metres
+  population: number
+  houses: number
+}
+
+export const settlements: Settlement[] = [
+  { kind: 'village', name: 'Farnholm', at: [3720, 930], label: [3260, 1120], population: 410, houses: 70 },
+  { kind: 'village', name: 'Upper Keld', at: [-420, -470], label: [130, -330], population: 160, houses: 34 },
+  {
+    kind: 'hamlet',
+    name: 'Nether Keld',
+    at: [-2820, -1430],
+    label: [-3300, -1260],
+    population: 60,
+    houses: 16,
+  },
+  { kind: 'hamlet', name: 'Skarth', at: [-2160, 2480], label: [-2420, 2500], population: 45, houses: 12 },
+  { kind: 'hamlet', name: 'Auksey', at: [3330, -1410], label: [3560, -1220], population: 30, houses: 10 },
 ]
 
 export const fells: Named[] = [
@@ -169,5 +183,5 @@ export const fells: Named[] = [
 export const seaNames: (Named & { size: 'sound' | 'bay' })[] = [
   { size: 'sound', name: 'Keld Sound', at: [-1700, -3330] },
   { size: 'sound', name: 'Harrow Deep', at: [1200, 3900] },
-  { size: 'bay', name: 'Farn Haven', at: [4700, 1080] },
+  { size: 'bay', name: 'Farn Haven', at: [4620, 1180] },
 ]

@@ -58,7 +58,7 @@ export function nameLayers(c: GroundPalette): LayerSpecification[] {
       type: 'symbol',
       ...fromGround('x_sea_labels'),
       minzoom: 10,
-      filter: ['step', ['zoom'], ['==', ['get', 'size'], 'sound'], 12, true],
+      filter: ['step', ['zoom'], ['==', ['get', 'size'], 'sound'], 13, true],
       layout: {
         'text-field': name,
         'text-font': ['Work Sans Italic'],
@@ -106,8 +106,6 @@ export function nameLayers(c: GroundPalette): LayerSpecification[] {
           12.5,
         ],
         'text-letter-spacing': 0.02,
-        'text-variable-anchor': ['bottom', 'top', 'right', 'left'],
-        'text-radial-offset': 0.7,
       },
       paint: onLand,
     },

@@ -2,7 +2,10 @@ import type { LayerSpecification } from 'maplibre-gl'
 import type { GroundPalette } from './palette'
 import { byZoom, fromGround } from './style-parts'
 
-/** The sea over the land's edge, water lines, shore, becks and the teeth of the cliffs. */
+/**
+ * The sea over the land's edge, water lines, shore, becks and cliffs. Far out the teeth stand behind the shore, where
+ * they can be seen; near, they hang from the cliff's top towards the sea.
+ */
 export function seaLayers(c: GroundPalette): LayerSpecification[] {
   return [
     {
@@ -56,22 +59,22 @@ export function seaLayers(c: GroundPalette): LayerSpecification[] {
       minzoom: 11.5,
       paint: {
         'line-color': c.cliff,
-        'line-width': byZoom([11.5, 2], [13, 3.4], [15, 4.2], [17, 6.4]),
-        'line-offset': byZoom([11.5, 1], [13, 1.7], [15, 2.1], [17, 3.2]),
-        'line-dasharray': [0.3, 0.8],
-        'line-opacity': 0.72,
+        'line-width': byZoom([11.5, 2.4], [13, 3.8], [15, 4.2], [17, 6.4]),
+        'line-offset': byZoom([11.5, -1], [13.2, -0.9], [14.4, 1.2], [15, 2.1], [17, 3.2]),
+        'line-dasharray': [0.28, 0.72],
+        'line-opacity': 0.78,
       },
     },
     {
       id: 'cliff-top',
       type: 'line',
       ...fromGround('x_cliffs'),
-      minzoom: 12.2,
+      minzoom: 13.4,
       layout: { 'line-join': 'round' },
       paint: {
         'line-color': c.cliff,
         'line-width': byZoom([12, 0.5], [13, 0.8], [16, 1.3]),
-        'line-opacity': 0.8,
+        'line-opacity': byZoom([13.4, 0], [14.2, 0.8]),
       },
     },
   ]

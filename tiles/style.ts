@@ -6,7 +6,7 @@ import { seaLayers } from './style-sea'
 import { wayLayers } from './style-ways'
 
 /** Absolute addresses of the shipped font files for one face: basic Latin, and its extension where there is one. */
-export interface FontFiles {
+interface FontFiles {
   latin: string
   latinExt?: string
 }
