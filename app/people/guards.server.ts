@@ -1,15 +1,17 @@
 import { redirect } from 'react-router'
-import { forbidden, notFound } from '~/web/responses'
+import { log } from '~/web/log.server'
+import { forbidden, notFound, unreachable } from '~/web/responses'
 import type { Action } from './permission'
 import { toRefusal } from './refusal'
 import { can, type Subject, type Viewer } from './viewer'
 
-/** The person signed in; else throws the way to signing in, which leads back to the page asked for. */
+/** The person signed in (503 while the database is away); else throws the way to signing in, which leads back to the page asked for. */
 export function requirePerson<V extends Viewer>(
   viewer: V,
   request: Request,
 ): V & { person: NonNullable<Viewer['person']> } {
   if (viewer.person !== null) return { ...viewer, person: viewer.person }
+  if (viewer.away) throw unreachable()
   const url = new URL(request.url)
   // what was sent cannot be sent again by going back, so a form leads back to the page it stands on
   const to = url.pathname.replace(/(\/_root|\/_)?\.data$/, '') || '/'
@@ -33,5 +35,7 @@ export function requireCan(
   { seen }: { seen: boolean },
 ): void {
   if (can(viewer, action, subject)) return
+  if (viewer.away) throw unreachable()
+  log.info({ action, person: viewer.person?.id ?? null, seen }, 'refused')
   throw seen ? forbidden(toRefusal(viewer, action)) : notFound()
 }

@@ -12,6 +12,8 @@ export interface Membership {
 export interface Viewer {
   person: { id: string; name: string; email: string; over18: boolean } | null
   memberships: Membership[]
+  /** nobody is known because the database cannot be asked: guards answer that, not that nobody is signed in */
+  away?: true
 }
 
 export const stranger: Viewer = { person: null, memberships: [] }

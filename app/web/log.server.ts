@@ -3,9 +3,9 @@ import type { RequestHandler } from 'express'
 import { pino } from 'pino'
 import { redactPath } from './link-paths'
 
-/** The log: JSON lines on standard output, without names, addresses or secrets. `LOG_LEVEL` sets how much. */
+/** The log: JSON lines on standard output, without names, addresses or secrets. `LOG_LEVEL` sets how much (tests: none). */
 export const log = pino({
-  level: process.env.LOG_LEVEL ?? 'info',
+  level: process.env.LOG_LEVEL ?? (process.env.VITEST ? 'silent' : 'info'),
   base: undefined,
   timestamp: pino.stdTimeFunctions.isoTime,
 })

@@ -58,3 +58,8 @@ export function notFound(reason = 'There is nothing here, or it is not open to y
 export function forbidden(reason: string) {
   return data({ reason }, { status: 403 })
 }
+
+/** To be thrown: the database is away, so that nothing can be said or done; a form's action answers `away`. */
+export function unreachable() {
+  return data({ reason: awaySentence }, { status: 503 })
+}

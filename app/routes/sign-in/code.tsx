@@ -10,6 +10,7 @@ import { FormErrors } from '~/ui/form-errors'
 import { Page } from '~/ui/page'
 import { clockContext, databaseContext, settingsContext } from '~/web/context'
 import { sessionCookie, toSetCookie } from '~/web/cookies'
+import { log } from '~/web/log.server'
 import { invalid, orAway } from '~/web/responses'
 import type { Route } from './+types/code'
 
@@ -40,6 +41,7 @@ export async function action({ request, context }: Route.ActionArgs) {
       throw redirect(to, { headers: { 'Set-Cookie': toSetCookie(sessionCookie, secret) } })
     } catch (error) {
       if (!(error instanceof CodeRefused)) throw error
+      log.info('code refused')
       return invalid({ errors: { code: error.reason }, typed: { code: error.typed } })
     }
   })

@@ -47,3 +47,12 @@ test('every action has a refusal that is one or two whole sentences', () => {
   for (const action of actions)
     expect(toRefusal(stranger, action)).toMatch(/^Only [^.]+\.( Sign in [^.]+\.)?$/)
 })
+
+test('while the database cannot be asked nobody is sent to sign in: the page says what is wrong', () => {
+  const unknown: Viewer = { ...stranger, away: true }
+  const request = new Request('http://x.example/account')
+  expect(thrownBy(() => requirePerson(unknown, request))).toMatchObject({ init: { status: 503 } })
+  expect(thrownBy(() => requireCan(unknown, 'report:decide', {}, { seen: true }))).toMatchObject({
+    init: { status: 503 },
+  })
+})
