@@ -14,15 +14,9 @@ interface TypedCode {
   sessionHash: string | null
 }
 
-/** Thrown when a code does not sign in: a sentence for the code's field. What was typed goes back into the form. */
+/** Thrown when a code does not sign in: a sentence for the code's field. */
 export class CodeRefused extends Error {
   override name = 'CodeRefused'
-  constructor(
-    readonly reason: string,
-    readonly typed: string,
-  ) {
-    super(reason)
-  }
 }
 
 /** Signing in by a mailed code: the form's `code`, bound to the browser by its own cookie. */
@@ -32,14 +26,10 @@ export class CodeStrategy extends Strategy<SignedIn, TypedCode> {
   async authenticate(request: Request): Promise<SignedIn> {
     const cookies = request.headers.get('cookie')
     const parsed = parseForm(CodeForm, await readForm(request))
-    const typed = String(parsed.typed.code ?? '')
-    if (!parsed.ok) throw new CodeRefused(parsed.errors.code!, typed)
+    if (!parsed.ok) throw new CodeRefused(parsed.errors.code)
     const browser = findCookie(cookies, guestCookie)
     if (browser === null) {
-      throw new CodeRefused(
-        'A code works only in the browser that asked for it. Ask for a new one here.',
-        typed,
-      )
+      throw new CodeRefused('A code works only in the browser that asked for it. Ask for a new one here.')
     }
     const session = findCookie(cookies, sessionCookie)
     return await this.verify({
@@ -50,14 +40,14 @@ export class CodeStrategy extends Strategy<SignedIn, TypedCode> {
   }
 }
 
-function orRefuse(answer: SignInAnswer, typed: string): SignedIn {
-  if (!answer.ok) throw new CodeRefused(answer.reason, typed)
+function orRefuse(answer: SignInAnswer): SignedIn {
+  if (!answer.ok) throw new CodeRefused(answer.reason)
   return answer
 }
 
 /** The ways to sign in, for one request. */
 export function createAuthenticator({ db, act, appSecret }: { db: Database; act: Act; appSecret: string }) {
   return new Authenticator<SignedIn>().use(
-    new CodeStrategy(async typed => orRefuse(await signInByCode(db, act, typed, appSecret), typed.code)),
+    new CodeStrategy(async typed => orRefuse(await signInByCode(db, act, typed, appSecret))),
   )
 }

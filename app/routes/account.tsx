@@ -14,7 +14,8 @@ import { Page } from '~/ui/page'
 import { clockContext, databaseContext } from '~/web/context'
 import { sessionCookie, toClearCookie } from '~/web/cookies'
 import { parseForm, readForm } from '~/web/forms.server'
-import { type FormAnswer, invalid, orAway } from '~/web/responses'
+import { keepTyped } from '~/web/keep-typed.server'
+import { type FormAnswer, invalid } from '~/web/responses'
 import type { Route } from './+types/account'
 
 export const meta: Route.MetaFunction = () => [
@@ -43,14 +44,14 @@ export async function action({ request, context }: Route.ActionArgs) {
   const db = context.get(databaseContext)
   const form = await readForm(request)
   if (form.get('intent') === 'sign-out-everywhere') {
-    return await orAway({}, async () => {
+    return await keepTyped({ intent: 'sign-out-everywhere' }, async () => {
       await signOutEverywhere(db, act, person.id)
       throw redirect('/', { headers: { 'Set-Cookie': toClearCookie(sessionCookie) } })
     })
   }
   const parsed = parseForm(AccountForm, form)
   if (!parsed.ok) return invalid(parsed)
-  return await orAway(parsed.typed, async () => {
+  return await keepTyped(parsed.typed, async () => {
     await editPerson(db, act, person.id, parsed.value)
     return data<FormAnswer & { saved: true }>({ errors: {}, typed: {}, saved: true })
   })

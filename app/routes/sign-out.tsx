@@ -7,7 +7,7 @@ import { FormErrors } from '~/ui/form-errors'
 import { Page } from '~/ui/page'
 import { clockContext, databaseContext } from '~/web/context'
 import { sessionCookie, toClearCookie } from '~/web/cookies'
-import { orAway } from '~/web/responses'
+import { keepTyped } from '~/web/keep-typed.server'
 import type { Route } from './+types/sign-out'
 
 export const meta: Route.MetaFunction = () => [
@@ -22,7 +22,7 @@ export function loader({ context }: Route.LoaderArgs) {
 
 export async function action({ context }: Route.ActionArgs) {
   const { person, sessionHash } = context.get(viewerContext)
-  return await orAway({}, async () => {
+  return await keepTyped({}, async () => {
     if (person !== null && sessionHash !== null) {
       const act = toAct(context.get(clockContext)(), { kind: 'person', personId: person.id })
       await signOut(context.get(databaseContext), act, { personId: person.id, sessionHash })

@@ -1,5 +1,4 @@
 import { data } from 'react-router'
-import { isDatabaseAway } from './database-away'
 
 export type Typed = Record<string, string | string[]>
 
@@ -34,21 +33,6 @@ export function tooMany(reason: string, retryAfter: number, typed: Typed = {}) {
 export const awaySentence =
   'The record cannot be reached just now, so nothing was saved. What you typed is still here: send it again in a minute.'
 
-/** 503: the database is away; the form stands as it was typed. */
-export function away(typed: Typed = {}) {
-  return answer(503, { errors: {}, typed, reason: awaySentence })
-}
-
-/** Runs an action's work; when the database is away the answer is the form as it was typed (503). */
-export async function orAway<T>(typed: Typed, work: () => Promise<T>) {
-  try {
-    return await work()
-  } catch (error) {
-    if (isDatabaseAway(error)) return away(typed)
-    throw error
-  }
-}
-
 /** To be thrown: what the whole page answers when there is nothing to show, with a sentence in `data.reason`. */
 export function notFound(reason = 'There is nothing here, or it is not open to you.') {
   return data({ reason }, { status: 404 })
@@ -59,7 +43,7 @@ export function forbidden(reason: string) {
   return data({ reason }, { status: 403 })
 }
 
-/** To be thrown: the database is away, so that nothing can be said or done; a form's action answers `away`. */
+/** To be thrown: the database is away, so that nothing can be said or done. */
 export function unreachable() {
   return data({ reason: awaySentence }, { status: 503 })
 }

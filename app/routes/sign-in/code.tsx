@@ -10,8 +10,10 @@ import { FormErrors } from '~/ui/form-errors'
 import { Page } from '~/ui/page'
 import { clockContext, databaseContext, settingsContext } from '~/web/context'
 import { sessionCookie, toSetCookie } from '~/web/cookies'
+import { readForm, toTyped } from '~/web/forms.server'
+import { keepTyped } from '~/web/keep-typed.server'
 import { log } from '~/web/log.server'
-import { invalid, orAway } from '~/web/responses'
+import { invalid } from '~/web/responses'
 import type { Route } from './+types/code'
 
 export const meta: Route.MetaFunction = () => [
@@ -34,7 +36,8 @@ export async function action({ request, context }: Route.ActionArgs) {
   const act = toAct(context.get(clockContext)(), { kind: 'guest', personId: null })
   const { appSecret } = context.get(settingsContext)
   const authenticator = createAuthenticator({ db: context.get(databaseContext), act, appSecret })
-  return await orAway({}, async () => {
+  const typed = toTyped(await readForm(request.clone()))
+  return await keepTyped(typed, async () => {
     try {
       const { secret, isNew } = await authenticator.authenticate('code', request)
       const to = toReturnPath(findWay(request), isNew ? '/account' : '/')
@@ -42,7 +45,7 @@ export async function action({ request, context }: Route.ActionArgs) {
     } catch (error) {
       if (!(error instanceof CodeRefused)) throw error
       log.info('code refused')
-      return invalid({ errors: { code: error.reason }, typed: { code: error.typed } })
+      return invalid({ errors: { code: error.message }, typed })
     }
   })
 }

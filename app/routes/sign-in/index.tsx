@@ -11,8 +11,9 @@ import { Page } from '~/ui/page'
 import { clockContext, databaseContext, settingsContext, wakeContext } from '~/web/context'
 import { findCookie, guestCookie, toSetCookie } from '~/web/cookies'
 import { parseForm, readForm } from '~/web/forms.server'
+import { keepTyped } from '~/web/keep-typed.server'
 import { networkContext } from '~/web/network'
-import { invalid, orAway, tooMany } from '~/web/responses'
+import { invalid, tooMany } from '~/web/responses'
 import type { Route } from './+types/index'
 
 export const meta: Route.MetaFunction = () => [
@@ -36,7 +37,7 @@ export async function action({ request, context }: Route.ActionArgs) {
     browserHash: hashSecret(browser),
     network: context.get(networkContext),
   }
-  return await orAway(parsed.typed, async () => {
+  return await keepTyped(parsed.typed, async () => {
     const answer = await askForCode(context.get(databaseContext), act, asked, context.get(settingsContext))
     if (!answer.ok) return tooMany(answer.reason, 60, parsed.typed)
     context.get(wakeContext)()

@@ -211,11 +211,10 @@ test('the strategy reads code and browser from the request and gives the new ses
   const spaced = `${code!.slice(0, 4)} ${code!.slice(4)}`
   const run = (typed: string, cookie: string) => authenticator.authenticate('code', toRequest(typed, cookie))
   await expect(run('12', '')).rejects.toMatchObject({
-    reason: expect.stringContaining('eight digits'),
-    typed: '12',
+    message: expect.stringContaining('eight digits'),
   })
   await expect(run(spaced, '')).rejects.toMatchObject({
-    reason: expect.stringContaining('only in the browser'),
+    message: expect.stringContaining('only in the browser'),
   })
   await expect(run(wrong(code!), `__Host-guest=${browser}`)).rejects.toBeInstanceOf(CodeRefused)
   expect(await run(spaced, `__Host-guest=${browser}`)).toMatchObject({
