@@ -1,5 +1,5 @@
 import { Form, redirect, useNavigation } from 'react-router'
-import { askForCode } from '~/people/codes.server'
+import { askForCode } from '~/people/code-asking.server'
 import { toReturnPath, toReturnQuery } from '~/people/return-path'
 import { AskForm } from '~/people/sign-in.schema'
 import { viewerContext } from '~/people/viewer-context'
