@@ -1,6 +1,6 @@
+import { fileURLToPath } from 'node:url'
 import { reactRouter } from '@react-router/dev/vite'
 import tailwindcss from '@tailwindcss/vite'
-import { fileURLToPath } from 'node:url'
 import { defineConfig } from 'vitest/config'
 
 const here = (path: string) => fileURLToPath(new URL(path, import.meta.url))
@@ -10,6 +10,7 @@ const underTest = process.env.VITEST !== undefined
 const serverInputs = {
   index: './app/server.ts',
   seed: './drizzle/seed.ts',
+  ground: './tiles/build.ts',
   'fake-mail': './fakes/mail/server.ts',
 }
 

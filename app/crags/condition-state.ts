@@ -16,7 +16,7 @@ export const conditionShort: Record<ConditionState, string> = { ...conditionWord
 
 /** The worst of the given states; `unknown` when there is none. */
 export function worstState(states: Iterable<ConditionState>): ConditionState {
-  let worst = conditionStates.length
+  let worst: number = conditionStates.length
   for (const state of states) worst = Math.min(worst, conditionStates.indexOf(state))
   return conditionStates[worst] ?? 'unknown'
 }

@@ -128,7 +128,10 @@ export async function listKeepingOrganisations(db: Queryable, cragId: string) {
 }
 
 /** What permission asks of a crag: its sensitivity and the organisations that look after it. */
-export async function requireCragSubject(db: Queryable, cragId: string): Promise<Required<Pick<Subject, 'crag'>>> {
+export async function requireCragSubject(
+  db: Queryable,
+  cragId: string,
+): Promise<Required<Pick<Subject, 'crag'>>> {
   const [row] = await db
     .select({ sensitive: crags.sensitive })
     .from(crags)

@@ -4,10 +4,10 @@ import {
   areas,
   climbAnchors,
   climbs,
+  consents,
   cragKeepers,
   cragOrganisations,
   crags,
-  consents,
   ledges,
   parts,
   pitches,
@@ -16,8 +16,8 @@ import {
 import { toCode } from '~/lib/code'
 import type { Remit } from '~/people/role'
 import type { Sensitivity } from '~/people/sensitivity'
-import { writeActivity } from '~/record/activities.server'
 import type { Act } from '~/record/act'
+import { writeActivity } from '~/record/activities.server'
 import type { AnchorKind, Below } from './anchor'
 import type { ConsentState, Corrosivity, Rock, Traffic } from './crag'
 import type { DatePrecision, Material, PartKind, Side } from './part'
@@ -86,7 +86,13 @@ export async function addCrag(tx: Queryable, act: Act, area: { id: string; code:
     conditions: crag.consentConditions ?? null,
     ...stamped(act),
   })
-  await writeActivity(tx, act, { verb: 'added', subjectKind: 'crag', subjectId: id, cragId: id, public: true })
+  await writeActivity(tx, act, {
+    verb: 'added',
+    subjectKind: 'crag',
+    subjectId: id,
+    cragId: id,
+    public: true,
+  })
   return { id, code, areaCode: area.code }
 }
 

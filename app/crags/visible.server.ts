@@ -1,4 +1,4 @@
-import { type SQL, inArray, sql } from 'drizzle-orm'
+import { inArray, type SQL, sql } from 'drizzle-orm'
 import { crags } from '~/db/schema/crags'
 import type { Viewer } from '~/people/viewer'
 

@@ -1,4 +1,4 @@
-import { type MySql2Database, drizzle } from 'drizzle-orm/mysql2'
+import { drizzle, type MySql2Database } from 'drizzle-orm/mysql2'
 import { createPool } from 'mysql2/promise'
 
 export type Database = MySql2Database<Record<string, never>>

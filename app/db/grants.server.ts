@@ -1,4 +1,4 @@
-import { type RowDataPacket, createConnection } from 'mysql2/promise'
+import { createConnection, type RowDataPacket } from 'mysql2/promise'
 
 /** Tables the app may only add to: the record of what was done stays as it was written. */
 const appendOnly = new Set(['activities'])

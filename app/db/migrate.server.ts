@@ -1,4 +1,4 @@
-import { type Connection, type RowDataPacket, createConnection } from 'mysql2/promise'
+import { type Connection, createConnection, type RowDataPacket } from 'mysql2/promise'
 
 const lock = 'cragfettle:migrate'
 
@@ -44,7 +44,8 @@ export async function migrateDatabase({
   const connection = await createConnection({ uri: ownerUrl, timezone: 'Z', charset: 'utf8mb4_unicode_ci' })
   try {
     const [[got]] = await connection.query<RowDataPacket[]>('SELECT GET_LOCK(?, 60) AS got', [lock])
-    if (got?.got !== 1) throw new Error('Another process has been migrating this database for a minute; try again.')
+    if (got?.got !== 1)
+      throw new Error('Another process has been migrating this database for a minute; try again.')
     const done = await listDone(connection)
     let applied = 0
     for (const { file, statements } of listMigrations()) {

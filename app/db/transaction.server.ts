@@ -1,4 +1,4 @@
-import type { Database, Transaction } from './client.server.ts'
+import type { Database, Transaction } from './client.server'
 
 const deadlock = 1213
 const lockTimeout = 1205

@@ -1,6 +1,11 @@
 /** The day of a moment in a time zone, as `2027-03-12`. */
 export function toDay(moment: Date, timeZone: string): string {
-  return new Intl.DateTimeFormat('en-CA', { timeZone, year: 'numeric', month: '2-digit', day: '2-digit' }).format(moment)
+  return new Intl.DateTimeFormat('en-CA', {
+    timeZone,
+    year: 'numeric',
+    month: '2-digit',
+    day: '2-digit',
+  }).format(moment)
 }
 
 /** A day so many months on (never past the month's end), as `2027-03-31`. */

@@ -2,7 +2,7 @@ import { asc, desc, eq } from 'drizzle-orm'
 import type { Queryable } from '~/db/client.server'
 import { ratingModels, ratingValues } from '~/db/schema/rating'
 import type { Act } from '~/record/act'
-import { type RatingModel, modelRows, toModel } from './model'
+import { modelRows, type RatingModel, toModel } from './model'
 
 const loaded = new Map<string, RatingModel>()
 

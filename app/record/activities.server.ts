@@ -52,10 +52,7 @@ export async function listActivities(
     })
     .from(activities)
     .where(
-      and(
-        inArray(activities.subjectId, subjectIds),
-        publicOnly ? eq(activities.public, true) : undefined,
-      ),
+      and(inArray(activities.subjectId, subjectIds), publicOnly ? eq(activities.public, true) : undefined),
     )
     .orderBy(desc(activities.at), desc(activities.id))
     .limit(limit)

@@ -37,7 +37,10 @@ function findWorstFault(standing: StandingFinding[]): Judged | null {
 }
 
 function newest<T extends { seenOn: string }>(list: T[]): T | null {
-  return list.reduce<T | null>((best, next) => (best === null || next.seenOn > best.seenOn ? next : best), null)
+  return list.reduce<T | null>(
+    (best, next) => (best === null || next.seenOn > best.seenOn ? next : best),
+    null,
+  )
 }
 
 /**

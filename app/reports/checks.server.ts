@@ -1,7 +1,7 @@
 import type { Transaction } from '~/db/client.server'
 import { findings, reports } from '~/db/schema/reports'
-import { writeActivity } from '~/record/activities.server'
 import type { Act } from '~/record/act'
+import { writeActivity } from '~/record/activities.server'
 import type { HowSeen } from './report'
 
 /**

@@ -55,7 +55,14 @@ export const edgeWords: Record<EdgeClass, string> = {
   knife: 'edge that cuts',
 }
 
-const rustWords = ['no rust', 'a trace of rust', 'spots of rust', 'patches of rust', 'flaking rust', 'rust all over']
+const rustWords = [
+  'no rust',
+  'a trace of rust',
+  'spots of rust',
+  'patches of rust',
+  'flaking rust',
+  'rust all over',
+]
 
 function formatMeasure(found: { unit: string | null; low: number | null; high: number | null }): string {
   const { low, high } = found

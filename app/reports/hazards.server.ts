@@ -2,13 +2,14 @@ import { and, asc, eq, inArray, isNotNull } from 'drizzle-orm'
 import { formatPosition } from '~/crags/anchor'
 import { visibleCrags } from '~/crags/visible.server'
 import type { Queryable, Transaction } from '~/db/client.server'
-import { Refusal } from '~/db/transaction.server'
 import { anchors, areas, climbAnchors, climbs, crags } from '~/db/schema/crags'
 import { people } from '~/db/schema/people'
 import { hazards, reports } from '~/db/schema/reports'
+import { Refusal } from '~/db/transaction.server'
+import { findMove } from '~/lib/moves'
 import type { Viewer } from '~/people/viewer'
-import { writeActivity } from '~/record/activities.server'
 import type { Act } from '~/record/act'
+import { writeActivity } from '~/record/activities.server'
 import { type HazardState, hazardMoves, hazardStateWords } from './hazard'
 
 /**
@@ -21,7 +22,7 @@ export async function moveHazard(
   hazardId: string,
   move: { from: readonly HazardState[]; to: HazardState; verb: string; details?: Record<string, unknown> },
 ): Promise<void> {
-  const allowed = move.from.filter(from => hazardMoves.some(row => row.from === from && row.to === move.to))
+  const allowed = move.from.filter(from => findMove(hazardMoves, from, move.to) !== null)
   const [done] = await tx
     .update(hazards)
     .set({
@@ -39,7 +40,9 @@ export async function moveHazard(
     .limit(1)
   if (row === undefined) throw new Refusal('This hazard is no longer on record.')
   if (done.affectedRows === 0)
-    throw new Refusal(`This hazard is ${hazardStateWords[row.state]} now, so that can no longer be done. Open it again to see what happened.`)
+    throw new Refusal(
+      `This hazard is ${hazardStateWords[row.state]} now, so that can no longer be done. Open it again to see what happened.`,
+    )
   await writeActivity(tx, act, {
     verb: move.verb,
     subjectKind: 'hazard',
@@ -116,7 +119,9 @@ export type Hazard = NonNullable<Awaited<ReturnType<typeof findHazard>>>
 /** The hazards of the given ids with their places, for commands. */
 export async function listHazardsById(db: Queryable, ids: string[]): Promise<Hazard[]> {
   if (ids.length === 0) return []
-  return (await selectHazards(db).where(inArray(hazards.id, ids)).orderBy(asc(hazards.id)).limit(500)).map(withPosition)
+  return (await selectHazards(db).where(inArray(hazards.id, ids)).orderBy(asc(hazards.id)).limit(500)).map(
+    withPosition,
+  )
 }
 
 /** The hazards ever open at a fixed point, newest first. */
@@ -142,7 +147,10 @@ export async function listHazardReporters(db: Queryable, hazardId: string) {
     .where(and(eq(reports.hazardId, hazardId), isNotNull(reports.confirmedAt)))
     .orderBy(asc(reports.receivedAt))
     .limit(200)
-  const told = new Map<string, { reportId: string; personId: string | null; name: string | null; email: string }>()
+  const told = new Map<
+    string,
+    { reportId: string; personId: string | null; name: string | null; email: string }
+  >()
   for (const row of rows) {
     const email = row.personEmail ?? row.guestEmail
     if (email !== null && !told.has(email))

@@ -10,7 +10,7 @@ import { canonicalInputs } from '~/rating/inputs'
 import { requireModel } from '~/rating/models.server'
 import { engineVersion, rate } from '~/rating/rate'
 import type { Act } from '~/record/act'
-import { type Judgement, addJudgements, toUrgencySort } from './judgement'
+import { addJudgements, type Judgement, toUrgencySort } from './judgement'
 import { type RatedFinding, toRatingInputs } from './rating-inputs'
 
 async function requirePlace(db: Queryable, anchorId: string) {
@@ -118,7 +118,8 @@ async function keepRating(
     urgencySort: toUrgencySort(judgement.band, judgement.rate),
     updatedAt: act.now,
   }
-  if (target.hazardId !== undefined) await tx.update(hazards).set(outcome).where(eq(hazards.id, target.hazardId))
+  if (target.hazardId !== undefined)
+    await tx.update(hazards).set(outcome).where(eq(hazards.id, target.hazardId))
   else await tx.update(reports).set(outcome).where(eq(reports.id, target.reportId))
   return judgement
 }
@@ -140,7 +141,13 @@ export async function rateReport(tx: Transaction, act: Act, reportId: string, an
 }
 
 /** The urgency of a hazard from everything found in the reports that were taken in for it. */
-export async function rateHazard(tx: Transaction, act: Act, hazardId: string, anchorId: string, cause: string) {
+export async function rateHazard(
+  tx: Transaction,
+  act: Act,
+  hazardId: string,
+  anchorId: string,
+  cause: string,
+) {
   const found = await tx
     .select(ratedColumns)
     .from(findings)

@@ -40,8 +40,8 @@ export function toReceivedMail(mail: ReportMail & { confirmUrl: string | null })
       ],
       button:
         mail.confirmUrl === null
-          ? { label: 'See your report', url: mail.statusUrl }
-          : { label: 'Confirm this address', url: mail.confirmUrl },
+          ? { words: 'See your report', url: mail.statusUrl }
+          : { words: 'Confirm this address', url: mail.confirmUrl },
       ...(mail.confirmUrl === null ? {} : { footer: `Your report: ${mail.statusUrl}` }),
     }),
   }
@@ -75,7 +75,11 @@ export function toDecidedMail(
   }[mail.verb]
   return {
     kind: `report-${mail.verb.replace('_', '-')}`,
-    dedupeKey: `report-${mail.verb}:${mail.reportId}${mail.verb === 'needs_detail' ? `:${mail.words}` : ''}`.slice(0, 160),
+    dedupeKey:
+      `report-${mail.verb}:${mail.reportId}${mail.verb === 'needs_detail' ? `:${mail.words}` : ''}`.slice(
+        0,
+        160,
+      ),
     ...addressed(mail),
     subject: `${told.subject}: ${mail.place}`,
     ...renderMail({
@@ -85,7 +89,7 @@ export function toDecidedMail(
         ...(mail.words ? [`“${mail.words}”`] : []),
         told.words,
       ],
-      button: { label: mail.verb === 'needs_detail' ? 'Answer' : 'See your report', url: mail.statusUrl },
+      button: { words: mail.verb === 'needs_detail' ? 'Answer' : 'See your report', url: mail.statusUrl },
     }),
   }
 }
@@ -116,7 +120,7 @@ export function toDutyMail(mail: {
           : 'It is provisional, and the guest who sent it has not confirmed an address yet.',
         'Nothing is public until you take it in.',
       ],
-      button: { label: 'Open the report', url: mail.url },
+      button: { words: 'Open the report', url: mail.url },
     }),
   }
 }

@@ -22,7 +22,8 @@ export class PhotoRefused extends Error {
 }
 
 const kinds = new Set(['jpeg', 'png', 'webp', 'gif', 'tiff', 'avif'])
-const heic = 'is a HEIC picture, which cannot be read yet. Set the camera to "most compatible" or send a JPEG.'
+const heic =
+  'is a HEIC picture, which cannot be read yet. Set the camera to "most compatible" or send a JPEG.'
 
 /** At most two pictures are worked on at once; others wait their turn. */
 const waiting: (() => void)[] = []
@@ -66,8 +67,16 @@ async function writeSizes(path: string, folder: string): Promise<{ width: number
     .resize({ width: 2048, height: 2048, fit: 'inside', withoutEnlargement: true })
   const master = await upright.jpeg({ quality: 90, mozjpeg: false }).toFile(join(folder, 'master.jpg'))
   const sized = (width: number) =>
-    sharp(join(folder, 'master.jpg')).resize({ width, height: width, fit: 'inside', withoutEnlargement: true })
-  for (const width of photoWidths) await sized(width).webp({ quality: 80 }).toFile(join(folder, `${width}.webp`))
+    sharp(join(folder, 'master.jpg')).resize({
+      width,
+      height: width,
+      fit: 'inside',
+      withoutEnlargement: true,
+    })
+  for (const width of photoWidths)
+    await sized(width)
+      .webp({ quality: 80 })
+      .toFile(join(folder, `${width}.webp`))
   await sized(960).jpeg({ quality: 82 }).toFile(join(folder, '960.jpg'))
   return { width: master.width, height: master.height }
 }
@@ -85,7 +94,9 @@ export async function takePhotoFile(photoDir: string, path: string): Promise<Tak
       await checkPicture(path)
       await mkdir(working, { recursive: true })
       const size = await writeSizes(path, working).catch(() => {
-        throw new PhotoRefused('is broken: only part of it arrived or it cannot be read. Take or choose it again.')
+        throw new PhotoRefused(
+          'is broken: only part of it arrived or it cannot be read. Take or choose it again.',
+        )
       })
       const sha256 = await hashFile(join(working, 'master.jpg'))
       await rename(working, join(photoDir, key))

@@ -10,7 +10,12 @@ type Target = { reportId: string; workRecordId?: undefined } | { workRecordId: s
 const dayMs = 24 * 60 * 60_000
 
 /** Remembers photos just taken up, owned by a session or guest (`stagedBy`, a hash) until their form is sent, a day at most. */
-export async function stagePhotos(db: Queryable, act: Act, stagedBy: string, taken: TakenPhoto[]): Promise<void> {
+export async function stagePhotos(
+  db: Queryable,
+  act: Act,
+  stagedBy: string,
+  taken: TakenPhoto[],
+): Promise<void> {
   for (const photo of taken)
     await db.insert(photos).values({
       id: act.newId(),

@@ -13,7 +13,14 @@ export interface RatedClimb {
   traffic: Traffic
   ascentsYear: number | null
   ledges: { atM: number }[]
-  points: { anchorId: string; kind: AnchorKind; alongM: number; assumed: boolean; state: ConditionState; below: string }[]
+  points: {
+    anchorId: string
+    kind: AnchorKind
+    alongM: number
+    assumed: boolean
+    state: ConditionState
+    below: string
+  }[]
 }
 
 export interface RatedPart {
@@ -86,16 +93,20 @@ export function toRatingInputs(given: {
   }
 }
 
-function toParts(
-  there: RatedPart[],
-  findings: RatedFinding[],
-  kind: AnchorKind,
-  today: string,
-): PartInput[] {
+function toParts(there: RatedPart[], findings: RatedFinding[], kind: AnchorKind, today: string): PartInput[] {
   const known =
     there.length > 0
       ? there
-      : [{ id: 'assumed', side: null, kind: usualPart[kind], material: 'unknown' as const, sizeMm: null, fittedOn: null }]
+      : [
+          {
+            id: 'assumed',
+            side: null,
+            kind: usualPart[kind],
+            material: 'unknown' as const,
+            sizeMm: null,
+            fittedOn: null,
+          },
+        ]
   const homes = new Map<string, RatedFinding[]>()
   for (const finding of findings) {
     const home = known.find(part => part.id === finding.partId) ?? choosePart(finding.kind, known)!

@@ -122,7 +122,9 @@ async function refreshClimbsOf(tx: Transaction, act: Act, anchorIds: string[]): 
   }
 }
 
-function toWorst(points: { state: (typeof anchors.$inferSelect)['state']; band: Band | null; open: number }[]) {
+function toWorst(
+  points: { state: (typeof anchors.$inferSelect)['state']; band: Band | null; open: number }[],
+) {
   return {
     worstState: worstState(points.map(point => point.state)),
     worstBand: mostUrgent(points.map(point => point.band)),

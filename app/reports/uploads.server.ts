@@ -71,9 +71,18 @@ export function takeUploads(given: {
   return (request: Request, response: Response, next: NextFunction) => {
     if (request.method !== 'POST' || !request.is('multipart/form-data')) return next()
     const owner = given.ownerOf(request)
-    if (owner === null) return refuse(response, 403, 'Your browser kept no cookie of this form, so photos cannot be taken up. Allow cookies for this site, open the form again and send it once more.')
+    if (owner === null)
+      return refuse(
+        response,
+        403,
+        'Your browser kept no cookie of this form, so photos cannot be taken up. Allow cookies for this site, open the form again and send it once more.',
+      )
     if (Number(request.headers['content-length'] ?? 0) > formBytes)
-      return refuse(response, 413, `The photos together are larger than ${Math.round(formBytes / 1024 / 1024)} MB. Go back and send fewer at once.`)
+      return refuse(
+        response,
+        413,
+        `The photos together are larger than ${Math.round(formBytes / 1024 / 1024)} MB. Go back and send fewer at once.`,
+      )
     parse(request, response, error => {
       finish(request, owner, error).then(() => next(), next)
     })

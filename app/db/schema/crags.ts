@@ -10,21 +10,21 @@ import {
   uniqueIndex,
   varchar,
 } from 'drizzle-orm/mysql-core'
-import { anchorKinds, anchorLives, grounds } from '../../crags/anchor.ts'
-import { conditionStates } from '../../crags/condition-state.ts'
+import { anchorKinds, anchorLives, grounds } from '../../crags/anchor'
+import { conditionStates } from '../../crags/condition-state'
 import {
   type Corrosivity,
-  type Rock,
-  type Traffic,
   consentStates,
   hazardDetails,
+  type Rock,
+  type Traffic,
   traffics,
-} from '../../crags/crag.ts'
-import { datePrecisions, materials, partKinds, sides } from '../../crags/part.ts'
-import { remits } from '../../people/role.ts'
-import { sensitivities } from '../../people/sensitivity.ts'
-import { day, exactlyOne, moment, oneOf, point, stamps, uuid } from '../columns.ts'
-import { organisations, people } from './people.ts'
+} from '../../crags/crag'
+import { datePrecisions, materials, partKinds, type sides } from '../../crags/part'
+import { remits } from '../../people/role'
+import { sensitivities } from '../../people/sensitivity'
+import { day, exactlyOne, moment, oneOf, point, stamps, uuid } from '../columns'
+import { organisations, people } from './people'
 
 export const areas = mysqlTable('areas', {
   id: uuid('id').primaryKey(),
@@ -185,7 +185,7 @@ export const placeNames = mysqlTable(
     hidden: boolean('hidden').notNull().default(false),
     ...stamps,
   },
-  table => [exactlyOne('place_names_of', 'area_id', 'crag_id', 'sector_id', 'climb_id')],
+  () => [exactlyOne('place_names_of', 'area_id', 'crag_id', 'sector_id', 'climb_id')],
 )
 
 export const pitches = mysqlTable(

@@ -1,7 +1,7 @@
 import { index, int, json, mysqlTable, text, varchar } from 'drizzle-orm/mysql-core'
-import { leaseStates } from '../../record/activity.ts'
-import { moment, oneOf, uuid } from '../columns.ts'
-import { people } from './people.ts'
+import { leaseStates } from '../../record/activity'
+import { moment, oneOf, uuid } from '../columns'
+import { people } from './people'
 
 /** The outbox: mails are written with what they tell, and leave by the worker under a fixed Message-ID. */
 export const messages = mysqlTable(

@@ -1,9 +1,9 @@
 import { boolean, index, int, mysqlTable, primaryKey, text, varchar } from 'drizzle-orm/mysql-core'
-import { noticeKinds, noticeStates } from '../../notices/notice.ts'
-import { day, exactlyOne, moment, oneOf, stamps, uuid } from '../columns.ts'
-import { anchors, areas, climbs, crags, sectors } from './crags.ts'
-import { organisations, people } from './people.ts'
-import { hazards } from './reports.ts'
+import { noticeKinds, noticeStates } from '../../notices/notice'
+import { day, exactlyOne, moment, oneOf, stamps, uuid } from '../columns'
+import { anchors, areas, climbs, crags, sectors } from './crags'
+import { organisations, people } from './people'
+import { hazards } from './reports'
 
 export const notices = mysqlTable(
   'notices',

@@ -1,6 +1,6 @@
 import { boolean, index, int, mysqlTable, primaryKey, uniqueIndex, varchar } from 'drizzle-orm/mysql-core'
-import { roles } from '../../people/role.ts'
-import { moment, oneOf, stamps, uuid } from '../columns.ts'
+import { roles } from '../../people/role'
+import { moment, oneOf, stamps, uuid } from '../columns'
 
 export const people = mysqlTable(
   'people',

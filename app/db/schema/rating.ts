@@ -1,7 +1,7 @@
 import { double, index, int, json, mysqlTable, primaryKey, text, varchar } from 'drizzle-orm/mysql-core'
-import { bands } from '../../rating/band.ts'
-import { exactlyOne, moment, oneOf, uuid } from '../columns.ts'
-import { hazards, reports } from './reports.ts'
+import { bands } from '../../rating/band'
+import { exactlyOne, moment, oneOf, uuid } from '../columns'
+import { hazards, reports } from './reports'
 
 export const ratingModels = mysqlTable('rating_models', {
   id: uuid('id').primaryKey(),

@@ -1,6 +1,6 @@
 import { bigint, boolean, index, int, json, mysqlTable, text, varchar } from 'drizzle-orm/mysql-core'
-import { actorKinds, leaseStates, subjectKinds } from '../../record/activity.ts'
-import { moment, oneOf, uuid } from '../columns.ts'
+import { actorKinds, leaseStates, subjectKinds } from '../../record/activity'
+import { moment, oneOf, uuid } from '../columns'
 
 /** One line for every move; append-only by the database's grants, but `details` may be erased. */
 export const activities = mysqlTable(

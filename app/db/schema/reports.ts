@@ -10,14 +10,14 @@ import {
   text,
   varchar,
 } from 'drizzle-orm/mysql-core'
-import { bands } from '../../rating/band.ts'
-import { type EdgeClass, findingKinds } from '../../rating/finding.ts'
-import { failureModes, hazardStates } from '../../reports/hazard.ts'
-import { photoStates } from '../../reports/photo.ts'
-import { howSeen, reportStates } from '../../reports/report.ts'
-import { day, moment, oneOf, stamps, uuid } from '../columns.ts'
-import { anchors, climbs, crags, parts, sectors } from './crags.ts'
-import { people } from './people.ts'
+import type { bands } from '../../rating/band'
+import { type EdgeClass, findingKinds } from '../../rating/finding'
+import { failureModes, hazardStates } from '../../reports/hazard'
+import { photoStates } from '../../reports/photo'
+import { howSeen, reportStates } from '../../reports/report'
+import { day, moment, oneOf, stamps, uuid } from '../columns'
+import { anchors, climbs, crags, parts, sectors } from './crags'
+import { people } from './people'
 
 /** What the rating of a report or hazard left on it; the rating itself is a row of its own. */
 const judged = {

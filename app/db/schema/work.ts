@@ -1,11 +1,11 @@
 import { double, index, int, mysqlTable, primaryKey, text, varchar } from 'drizzle-orm/mysql-core'
-import { materials, partKinds, sides } from '../../crags/part.ts'
-import { jobKinds } from '../../work/job.ts'
-import { checkMethods, checkerKinds, offerStates, orderStates } from '../../work/order.ts'
-import { day, exactlyOne, moment, oneOf, stamps, uuid } from '../columns.ts'
-import { anchors, climbs, crags, parts } from './crags.ts'
-import { organisations, people } from './people.ts'
-import { hazards, reports } from './reports.ts'
+import type { materials, partKinds, sides } from '../../crags/part'
+import { jobKinds } from '../../work/job'
+import { checkerKinds, checkMethods, offerStates, orderStates } from '../../work/order'
+import { day, exactlyOne, moment, oneOf, stamps, uuid } from '../columns'
+import { anchors, climbs, crags, parts } from './crags'
+import { organisations, people } from './people'
+import { hazards, reports } from './reports'
 
 export const orders = mysqlTable(
   'orders',
@@ -159,9 +159,7 @@ export const linkTokens = mysqlTable(
   'link_tokens',
   {
     tokenHash: varchar('token_hash', { length: 64 }).primaryKey(),
-    purpose: varchar('purpose', { length: 20 })
-      .$type<'report_status' | 'report_confirm' | 'offer' | 'sheet'>()
-      .notNull(),
+    purpose: varchar('purpose', { length: 20 }).$type<'report_confirm' | 'offer' | 'sheet'>().notNull(),
     reportId: uuid('report_id').references(() => reports.id),
     offerId: uuid('offer_id').references(() => offers.id),
     orderId: uuid('order_id').references(() => orders.id),
@@ -169,5 +167,5 @@ export const linkTokens = mysqlTable(
     usedAt: moment('used_at'),
     createdAt: moment('created_at').notNull(),
   },
-  table => [exactlyOne('link_tokens_of', 'report_id', 'offer_id', 'order_id')],
+  () => [exactlyOne('link_tokens_of', 'report_id', 'offer_id', 'order_id')],
 )

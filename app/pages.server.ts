@@ -1,0 +1,133 @@
+import { randomBytes } from 'node:crypto'
+import { createRequestHandler } from '@react-router/express'
+import { type Request, type RequestHandler, Router } from 'express'
+import { RouterContextProvider, type ServerBuild } from 'react-router'
+import type { ViteDevServer } from 'vite'
+import type { Database } from './db/client.server'
+import { findViewer } from './people/sessions.server'
+import { type KnownViewer, viewerContext } from './people/viewer-context'
+import { toAct } from './record/acts.server'
+import { takeUploads } from './reports/uploads.server'
+import { type Uploads, uploadsContext } from './reports/uploads-context'
+import { clockContext, databaseContext, nonceContext, settingsContext, wakeContext } from './web/context'
+import { findCookie, guestCookie, sessionCookie, toSetCookie } from './web/cookies'
+import { isDatabaseAway } from './web/database-away'
+import { createLimits } from './web/limits.server'
+import { hashNetwork } from './web/network.server'
+import { toPlainPage } from './web/plain-page'
+import { findNonce } from './web/security.server'
+import type { Settings } from './web/settings'
+
+interface Given {
+  db: Database
+  clock: () => Date
+  settings: Settings
+  vite: ViteDevServer | undefined
+  wake: () => void
+}
+
+type Known = Request & { viewer?: KnownViewer; uploads?: Uploads }
+
+const nobody: KnownViewer = {
+  person: null,
+  memberships: [],
+  sessionHash: null,
+  guestHash: null,
+  confirmedAt: null,
+}
+
+/** Knows who looks before anything is read; while the database is away it is nobody, and the page says what is wrong. */
+function knowViewer({ db, clock }: Given): RequestHandler {
+  return (request: Known, _response, next) => {
+    const header = request.headers.cookie
+    const secrets = { session: findCookie(header, sessionCookie), guest: findCookie(header, guestCookie) }
+    findViewer(db, secrets, clock())
+      .catch(error => {
+        if (isDatabaseAway(error)) return nobody
+        throw error
+      })
+      .then(viewer => {
+        request.viewer = viewer
+        next()
+      }, next)
+  }
+}
+
+/** Gives a browser that opens a form the cookie its codes and staged photos hang on. */
+const nameBrowser: RequestHandler = (request, response, next) => {
+  if (request.method === 'GET' && findCookie(request.headers.cookie, guestCookie) === null)
+    response.append('Set-Cookie', toSetCookie(guestCookie, randomBytes(32).toString('base64url')))
+  next()
+}
+
+const ownerOf = (request: Known) => request.viewer?.sessionHash ?? request.viewer?.guestHash ?? null
+
+function limitUploads({ db, settings }: Given): RequestHandler {
+  const limits = createLimits({ db, dbName: new URL(settings.databaseUrl).pathname.slice(1) })
+  return (request: Known, response, next) => {
+    if (request.method !== 'POST') return next()
+    const network = hashNetwork(request.ip, settings.appSecret)
+    limits.take('upload', { network, browser: ownerOf(request) }).then(answer => {
+      if (answer.ok) return next()
+      response
+        .status(429)
+        .set('Retry-After', String(answer.retryAfter))
+        .type('html')
+        .send(toPlainPage('Too many at once', [answer.reason]))
+    }, next)
+  }
+}
+
+/** Paths whose forms carry photos, each with the `.data` twin the framework posts to. */
+const photoForms = [
+  '/report/:climb/:point',
+  '/report/:climb/:point.data',
+  '/orders/:code/record',
+  '/orders/:code/record.data',
+]
+
+/** Paths that need a named browser even before anybody signs in. */
+const namedForms = ['/sign-in', '/sign-in/code', '/report/:climb/:point', '/orders/:code/record']
+
+/** The pages of the product, by the framework, behind knowing the viewer and taking photos up. */
+export function toPages(given: Given): Router {
+  const { db, clock, settings, vite } = given
+  const pages = Router()
+  pages.use(knowViewer(given))
+  pages.use(namedForms, nameBrowser)
+  pages.post(
+    photoForms,
+    limitUploads(given),
+    takeUploads({
+      photoDir: settings.photoDir,
+      db,
+      ownerOf,
+      toAct: (request: Known) =>
+        toAct(clock(), {
+          kind: request.viewer?.person ? 'person' : 'guest',
+          personId: request.viewer?.person?.id ?? null,
+        }),
+    }),
+  )
+  pages.use(
+    createRequestHandler({
+      build:
+        vite === undefined
+          ? () => import('virtual:react-router/server-build')
+          : () => vite.ssrLoadModule('virtual:react-router/server-build') as Promise<ServerBuild>,
+      mode: settings.production ? 'production' : 'development',
+      getLoadContext(request: Known, response) {
+        const context = new RouterContextProvider()
+        context.set(databaseContext, db)
+        context.set(clockContext, clock)
+        context.set(settingsContext, settings)
+        context.set(nonceContext, findNonce(response))
+        context.set(wakeContext, given.wake)
+        context.set(viewerContext, request.viewer ?? nobody)
+        context.set(uploadsContext, request.uploads ?? null)
+        return context
+      },
+    }),
+  )
+  return pages
+}

@@ -1,0 +1,37 @@
+import { index, layout, type RouteConfig, route } from '@react-router/dev/routes'
+
+/** The table of contents: every URL of the product and the module that answers it. */
+export default [
+  layout('routes/frame.tsx', [
+    index('routes/home.tsx'),
+    route('crags', 'routes/crags/index.tsx'),
+    route('crags/:slug', 'routes/crags/$slug.tsx'),
+    route('climbs/:slug', 'routes/climbs/$slug.tsx'),
+    route('points/:code', 'routes/points/$code.tsx'),
+    route('find', 'routes/find.tsx'),
+    route('notices', 'routes/notices/index.tsx'),
+    route('notices/new', 'routes/notices/new.tsx'),
+    route('notices/:code', 'routes/notices/$code.tsx'),
+    route('about', 'routes/about.tsx'),
+    route('hazards', 'routes/hazards/index.tsx'),
+    route('hazards/:code', 'routes/hazards/$code.tsx'),
+    route('reports/:id', 'routes/reports/$id.tsx'),
+    route('orders', 'routes/orders/index.tsx'),
+    route('orders/new', 'routes/orders/new.tsx'),
+    route('orders/:code', 'routes/orders/$code.tsx'),
+    route('orders/:code/record', 'routes/orders/$code.record.tsx'),
+    route('orders/:code/check', 'routes/orders/$code.check.tsx'),
+    route('status/:secret', 'routes/status/$secret.tsx'),
+    route('status/confirm/:secret', 'routes/status/confirm.$secret.tsx'),
+    route('offers/:token', 'routes/offers/$token.tsx'),
+    route('sheet/:token', 'routes/sheet/$token.tsx'),
+    route('sign-in', 'routes/sign-in/index.tsx'),
+    route('sign-in/code', 'routes/sign-in/code.tsx'),
+    route('sign-out', 'routes/sign-out.tsx'),
+    route('account', 'routes/account.tsx'),
+    route('report', 'routes/report/index.tsx'),
+    route('*', 'routes/missing.tsx'),
+  ]),
+  route('report/:climb', 'routes/report/$climb.tsx'),
+  route('report/:climb/:point', 'routes/report/$climb.$point.tsx'),
+] satisfies RouteConfig
