@@ -85,17 +85,12 @@ export async function signOutEverywhere(db: Database, act: Act, personId: string
 const day = 24 * 60 * 60 * 1000
 
 /** The worker's step that takes away sessions and codes that work no more (codes are counted for a day). */
-export function signInSweep(everyMilliseconds = 60 * 60 * 1000): Step {
-  let next = 0
-  return {
-    name: 'sign-in sweep',
-    async run({ db, clock }) {
-      const now = clock()
-      if (now.getTime() < next) return 0
-      await db.delete(sessions).where(lt(sessions.expiresAt, now))
-      await db.delete(signInCodes).where(lt(signInCodes.createdAt, new Date(now.getTime() - 2 * day)))
-      next = now.getTime() + everyMilliseconds
-      return 0
-    },
-  }
+export const signInSweep: Step = {
+  name: 'sign-in sweep',
+  async run({ db, clock }) {
+    const now = clock()
+    await db.delete(sessions).where(lt(sessions.expiresAt, now))
+    await db.delete(signInCodes).where(lt(signInCodes.createdAt, new Date(now.getTime() - 2 * day)))
+    return 0
+  },
 }

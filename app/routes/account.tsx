@@ -11,6 +11,7 @@ import { Button } from '~/ui/button'
 import { Field } from '~/ui/field'
 import { FormErrors } from '~/ui/form-errors'
 import { Page } from '~/ui/page'
+import { formatMoment } from '~/ui/when'
 import { clockContext, databaseContext } from '~/web/context'
 import { sessionCookie, toClearCookie } from '~/web/cookies'
 import { parseForm, readForm } from '~/web/forms.server'
@@ -61,8 +62,12 @@ export default function Account({ loaderData, actionData }: Route.ComponentProps
   const { person, memberships, sessions } = loaderData
   return (
     <Page title="Your account" lead={person.email}>
-      <FormErrors errors={actionData?.errors} reason={actionData?.reason} labels={{ name: 'Name' }} />
-      {actionData && 'saved' in actionData && <p role="status">Your account is saved.</p>}
+      <FormErrors errors={actionData?.errors ?? {}} reason={actionData?.reason} labels={{ name: 'Name' }} />
+      {actionData && 'saved' in actionData && (
+        <p role="status" className="mt-4">
+          Your account is saved.
+        </p>
+      )}
       <AboutYou person={person} answer={actionData} />
       {memberships.length > 0 && <Roles memberships={memberships} />}
       <SignedIn sessions={sessions} />
@@ -77,7 +82,7 @@ function AboutYou({ person, answer }: { person: Loaded['person']; answer: FormAn
   const typed = answer?.typed ?? {}
   const kept = 'name' in typed
   return (
-    <Form method="post" className="max-w-md">
+    <Form method="post" className="mt-6 grid max-w-md gap-4">
       <Field
         label="Name"
         name="name"
@@ -86,11 +91,11 @@ function AboutYou({ person, answer }: { person: Loaded['person']; answer: FormAn
         defaultValue={typeof typed.name === 'string' ? typed.name : person.name}
         error={answer?.errors.name}
       />
-      <label className="my-4 flex min-h-6 items-start gap-2">
+      <label className="choice">
         <input type="checkbox" name="over18" defaultChecked={kept ? 'over18' in typed : person.over18} />
         <span>I am 18 or older. Only then are you offered work on fixed gear.</span>
       </label>
-      <Button kind="action" name="intent" value="save" pending={pending}>
+      <Button name="intent" value="save" pending={pending} className="justify-self-start">
         Save
       </Button>
     </Form>
@@ -142,13 +147,4 @@ function SignedIn({ sessions }: { sessions: Loaded['sessions'] }) {
   )
 }
 
-const format = new Intl.DateTimeFormat('en-GB', {
-  timeZone: 'UTC',
-  day: 'numeric',
-  month: 'short',
-  year: 'numeric',
-  hour: '2-digit',
-  minute: '2-digit',
-})
-
-const formatTime = (moment: Date) => format.format(moment)
+const formatTime = (moment: Date) => formatMoment(moment, 'UTC')

@@ -3,7 +3,6 @@ import { signOut } from '~/people/sign-in.server'
 import { viewerContext } from '~/people/viewer-context'
 import { toAct } from '~/record/acts.server'
 import { Button } from '~/ui/button'
-import { FormErrors } from '~/ui/form-errors'
 import { Page } from '~/ui/page'
 import { clockContext, databaseContext } from '~/web/context'
 import { sessionCookie, toClearCookie } from '~/web/cookies'
@@ -31,15 +30,12 @@ export async function action({ context }: Route.ActionArgs) {
   })
 }
 
-export default function SignOut({ actionData }: Route.ComponentProps) {
+export default function SignOut() {
   const pending = useNavigation().formMethod !== undefined
   return (
     <Page title="Sign out" lead="You can go on reading the record and reporting without signing in.">
-      <FormErrors errors={actionData?.errors} reason={actionData?.reason} labels={{}} />
-      <Form method="post">
-        <Button kind="action" pending={pending}>
-          Sign out of this browser
-        </Button>
+      <Form method="post" className="mt-6">
+        <Button pending={pending}>Sign out of this browser</Button>
       </Form>
     </Page>
   )

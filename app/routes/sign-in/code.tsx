@@ -58,15 +58,15 @@ export default function TypeCode({ loaderData, actionData }: Route.ComponentProp
   const { search } = useLocation()
   return (
     <Page title="Type the code" lead={email ? `We sent a code to ${email}.` : undefined}>
-      <FormErrors errors={actionData?.errors} reason={actionData?.reason} labels={labels} />
+      <FormErrors errors={actionData?.errors ?? {}} reason={actionData?.reason} labels={labels} />
       {email === null ? (
-        <p>
+        <p className="mt-6">
           No code that still works was asked for in this browser. Codes last ten minutes.{' '}
           <Link to={again}>Ask for a code</Link>
         </p>
       ) : (
         <>
-          <Form method="post" action={`/sign-in/code${search}`} className="max-w-md">
+          <Form method="post" action={`/sign-in/code${search}`} className="mt-6 grid max-w-md gap-4">
             <Field
               label={labels.code}
               name="code"
@@ -76,7 +76,7 @@ export default function TypeCode({ loaderData, actionData }: Route.ComponentProp
               defaultValue={typeof actionData?.typed.code === 'string' ? actionData.typed.code : undefined}
               error={actionData?.errors.code}
             />
-            <Button kind="action" pending={pending}>
+            <Button pending={pending} className="justify-self-start">
               Sign in
             </Button>
           </Form>

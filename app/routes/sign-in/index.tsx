@@ -52,8 +52,8 @@ export default function SignIn({ actionData }: Route.ComponentProps) {
   const pending = useNavigation().formMethod !== undefined
   return (
     <Page title="Sign in" lead="We send a code of eight digits to your e-mail address. There is no password.">
-      <FormErrors errors={actionData?.errors} reason={actionData?.reason} labels={labels} />
-      <Form method="post" className="max-w-md">
+      <FormErrors errors={actionData?.errors ?? {}} reason={actionData?.reason} labels={labels} />
+      <Form method="post" className="mt-6 grid max-w-md gap-4">
         <Field
           label={labels.email}
           name="email"
@@ -63,7 +63,7 @@ export default function SignIn({ actionData }: Route.ComponentProps) {
           defaultValue={toText(actionData?.typed.email)}
           error={actionData?.errors.email}
         />
-        <Button kind="action" pending={pending}>
+        <Button pending={pending} className="justify-self-start">
           Send the code
         </Button>
       </Form>

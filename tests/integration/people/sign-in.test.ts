@@ -188,7 +188,7 @@ test('signing out ends one session, signing out everywhere all of them', async (
 test('the sweep takes away what works no more and leaves what still counts', async () => {
   await ask()
   await signIn((await readCodes())[0]!)
-  const sweep = (now: Date) => signInSweep().run({ db, clock: () => now, stopping: () => false })
+  const sweep = (now: Date) => signInSweep.run({ db, clock: () => now, stopping: () => false })
   await sweep(later(day))
   expect(await db.select().from(signInCodes)).toHaveLength(1)
   expect(await db.select().from(sessions)).toHaveLength(1)
