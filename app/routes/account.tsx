@@ -1,4 +1,4 @@
-import { data, Form, redirect, useNavigation } from 'react-router'
+import { Form, redirect, useNavigation } from 'react-router'
 import { requirePerson } from '~/people/guards.server'
 import { editPerson } from '~/people/people.server'
 import { roleWords } from '~/people/role'
@@ -29,6 +29,7 @@ export async function loader({ request, context }: Route.LoaderArgs) {
   const now = context.get(clockContext)()
   const sessions = await listSessions(context.get(databaseContext), viewer.person.id, now)
   return {
+    saved: new URL(request.url).searchParams.has('saved'),
     person: viewer.person,
     memberships: viewer.memberships,
     sessions: sessions.map(({ tokenHash, seenAt, createdAt }) => ({
@@ -54,16 +55,16 @@ export async function action({ request, context }: Route.ActionArgs) {
   if (!parsed.ok) return invalid(parsed)
   return await keepTyped(parsed.typed, async () => {
     await editPerson(db, act, person.id, parsed.value)
-    return data<FormAnswer & { saved: true }>({ errors: {}, typed: {}, saved: true })
+    throw redirect('/account?saved')
   })
 }
 
 export default function Account({ loaderData, actionData }: Route.ComponentProps) {
-  const { person, memberships, sessions } = loaderData
+  const { saved, person, memberships, sessions } = loaderData
   return (
     <Page title="Your account" lead={person.email}>
       <FormErrors errors={actionData?.errors ?? {}} reason={actionData?.reason} labels={{ name: 'Name' }} />
-      {actionData && 'saved' in actionData && (
+      {saved && actionData === undefined && (
         <p role="status" className="mt-4">
           Your account is saved.
         </p>

@@ -1,11 +1,16 @@
 import type { Request, RequestHandler } from 'express'
 import { hasOurCookie } from './cookies'
+import { isLinkPath } from './link-paths'
 import { toPlainPage } from './plain-page'
 
 const harmless = new Set(['GET', 'HEAD', 'OPTIONS'])
 
 function isFromHere(request: Request, origin: string): boolean {
-  return request.get('sec-fetch-site') === 'same-origin' || request.get('origin') === origin
+  const site = request.get('sec-fetch-site')
+  if (site === 'same-origin' || request.get('origin') === origin) return true
+  // a page without referrer sends `Origin: null`; an older browser says nothing else, and the secret in the path
+  // of a mailed link is one that no other site can know
+  return site === undefined && request.get('origin') === 'null' && isLinkPath(request.path)
 }
 
 /**

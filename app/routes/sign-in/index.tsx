@@ -53,7 +53,7 @@ export default function SignIn({ actionData }: Route.ComponentProps) {
   return (
     <Page title="Sign in" lead="We send a code of eight digits to your e-mail address. There is no password.">
       <FormErrors errors={actionData?.errors ?? {}} reason={actionData?.reason} labels={labels} />
-      <Form method="post" className="mt-6 grid max-w-md gap-4">
+      <Form method="post" noValidate className="mt-6 grid max-w-md gap-4">
         <Field
           label={labels.email}
           name="email"

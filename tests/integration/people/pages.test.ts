@@ -77,9 +77,9 @@ test('a newcomer signs in with a mailed code, gives a name, and signs out', asyn
   expect(await visit(typeCode, '/sign-in/code')).toMatchObject({ body: { email: 'mara@example.org' } })
   const signedIn = await visit(typeCode, '/sign-in/code', { code: await readCode() })
   expect(signedIn).toMatchObject({ status: 302, location: '/account' })
-  await visit(account, '/account', { intent: 'save', name: 'Mara Quill', over18: 'on' })
-  expect(await visit(account, '/account')).toMatchObject({
-    body: { person: { name: 'Mara Quill', over18: true }, sessions: [{ here: true }] },
+  const saved = await visit(account, '/account', { intent: 'save', name: 'Mara Quill', over18: 'on' })
+  expect(await visit(account, saved.location!)).toMatchObject({
+    body: { saved: true, person: { name: 'Mara Quill', over18: true }, sessions: [{ here: true }] },
   })
   expect(await visit(signOut, '/sign-out', {})).toMatchObject({ status: 302, location: '/' })
   expect(await visit(account, '/account')).toMatchObject({ status: 302, location: '/sign-in?to=%2Faccount' })

@@ -39,3 +39,11 @@ test('reading is never refused', async () => {
 test.each(['PUT', 'PATCH', 'DELETE'])('%s is held to the same as a form', async method => {
   expect((await server.ask('/', { method, headers: { cookie } })).status).toBe(403)
 })
+
+test('an older browser that sends only a hidden origin may answer on the page of a mailed link, nowhere else', async () => {
+  const send = (path: string, headers: object) =>
+    server.ask(path, { method: 'POST', headers: { cookie, origin: 'null', ...headers } })
+  expect((await send('/offers/s3cr3t', {})).status).toBe(200)
+  expect((await send('/offers/s3cr3t', { 'sec-fetch-site': 'cross-site' })).status).toBe(403)
+  expect((await send('/account', {})).status).toBe(403)
+})
