@@ -40,7 +40,7 @@ function toText({ heading, paragraphs, figure, button, table, picture, footer = 
     rows,
     picture && `[Picture: ${picture.alt}]`,
     button && `${button.words}:\n${button.url}`,
-    '-- ',
+    'Cragfettle',
     ...footer,
     caution,
   ]

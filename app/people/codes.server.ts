@@ -122,6 +122,6 @@ async function countWrong(tx: Transaction, live: Live, tries: number, now: Date)
   if (left === 0) return { ok: false, reason: toSpent(live, now) }
   return {
     ok: false,
-    reason: `That is not the code of the newest mail. Look again: ${left === 1 ? 'one try is' : `${left} tries are`} left.`,
+    reason: `That is not the code we mailed. Look again: ${left === 1 ? 'one try is' : `${left} tries are`} left.`,
   }
 }

@@ -70,8 +70,8 @@ export default function SignIn({ actionData }: Route.ComponentProps) {
       <h2 className="mt-8 text-1 font-semibold">New here?</h2>
       <p className="mt-2 max-w-prose">
         It is the same: the first code you type opens an account for your address. Anybody who climbs may have
-        one. You see your reports and what came of them. Nobody but the coordinator who looks after the crag
-        sees who reported.
+        one. Of those who report, name and address are seen only by the coordinators and access officers that
+        lead at the crag.
       </p>
       <p className="mt-2 max-w-prose">You can report fixed gear and read the record without an account.</p>
     </Page>
