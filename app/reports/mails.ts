@@ -42,7 +42,7 @@ export function toReceivedMail(mail: ReportMail & { confirmUrl: string | null })
         mail.confirmUrl === null
           ? { words: 'See your report', url: mail.statusUrl }
           : { words: 'Confirm this address', url: mail.confirmUrl },
-      ...(mail.confirmUrl === null ? {} : { footer: `Your report: ${mail.statusUrl}` }),
+      footer: mail.confirmUrl === null ? [] : [`Your report: ${mail.statusUrl}`],
     }),
   }
 }

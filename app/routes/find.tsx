@@ -93,7 +93,7 @@ function Found(props: {
       <Link to={props.to} className="flex min-h-12 items-center gap-3 text-slate no-underline">
         <ConditionMark state={props.state} size={16} decorative />
         <span className="font-medium">{props.name}</span>
-        <span className="text--1 text-stone">{props.where}</span>
+        <span className="text-s text-stone">{props.where}</span>
       </Link>
     </li>
   )

@@ -52,7 +52,7 @@ export default function Home({ loaderData }: Route.ComponentProps) {
         <Heights height={height} onChange={setHeight} count={crags.length} />
         <header className="home-head">
           <h1 className="text-2 font-semibold">{toTitle(crags)}</h1>
-          <p className="text--1 text-stone">{`${crags.length} crags, ${points.toLocaleString('en')} fixed points`}</p>
+          <p className="text-s text-stone">{`${crags.length} crags, ${points.toLocaleString('en')} fixed points`}</p>
           <p className="home-open text-stone">{`${hazards} open hazards, ${notices} notices in force`}</p>
         </header>
         {crags.length === 0 && (
@@ -103,7 +103,7 @@ function Heights(props: { height: string; onChange(height: 'map' | 'both' | 'lis
           {words}
         </button>
       ))}
-      <span className="ml-auto text--1 text-stone">{props.count} crags</span>
+      <span className="ml-auto text-s text-stone">{props.count} crags</span>
     </div>
   )
 }
@@ -143,8 +143,8 @@ function CragRow({
         </span>
         <span className="crag-name font-medium">{crag.name}</span>
         <span className={`crag-worst ${tones[crag.worstState]}`}>{formatWorst(crag.counts)}</span>
-        <span className="crag-open text--1 text-stone">{formatOpen(crag)}</span>
-        <span className="crag-routes text--1 text-stone">{`${crag.climbs} routes`}</span>
+        <span className="crag-open text-s text-stone">{formatOpen(crag)}</span>
+        <span className="crag-routes text-s text-stone">{`${crag.climbs} routes`}</span>
         <span className="crag-bar">
           <ConditionsBar counts={crag.counts} />
         </span>

@@ -19,7 +19,7 @@ export function Urgency({ band, bandHigh, small }: { band: Band; bandHigh: Band;
     <>
       <BandWord band={band} />
       {couldBe && (
-        <span className={small ? 'text--1 text-stone' : ''}>
+        <span className={small ? 'text-s text-stone' : ''}>
           {' '}
           <span className="text-stone">could be</span>{' '}
           {small ? bandWords[bandHigh] : <BandWord band={bandHigh} />}

@@ -16,7 +16,7 @@ export function PhotoField(props: {
   return (
     <fieldset className="mt-6" aria-describedby={`${id}-hint`}>
       <legend className="text-1 font-semibold">Photos</legend>
-      <p id={`${id}-hint`} className="mt-1 text--1 text-stone">
+      <p id={`${id}-hint`} className="mt-1 text-s text-stone">
         {props.hint ??
           `Up to ${photoLimits.files}. Close up, with something for scale. The place the camera wrote is left out.`}
       </p>
@@ -38,7 +38,7 @@ export function PhotoField(props: {
               height={92}
               className="size-23 rounded-[3px] object-cover"
             />
-            <span className="text--1">
+            <span className="text-s">
               <input type="checkbox" name="photo" value={photo.key} defaultChecked /> send it
             </span>
           </label>

@@ -23,7 +23,7 @@ export function PhotoStrip({ photos, label = 'Photos' }: { photos: Shown[]; labe
                 className="h-30 w-40 rounded-[3px] border border-rule object-cover"
               />
             </a>
-            {photo.credit && <span className="text--1 text-stone">{photo.credit}</span>}
+            {photo.credit && <span className="text-s text-stone">{photo.credit}</span>}
           </li>
         ))}
       </ul>

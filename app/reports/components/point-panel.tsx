@@ -79,7 +79,7 @@ function LastSeen({ partId, only, record }: { partId: string; only: boolean; rec
           {about.some(finding => finding.clearedAt !== null) && ' (mended since)'}
         </span>
         <br />
-        <span className="text--1 text-stone">{`${formatDay(look.seenOn)}, ${howSeenWords[look.howSeen]}`}</span>
+        <span className="text-s text-stone">{`${formatDay(look.seenOn)}, ${howSeenWords[look.howSeen]}`}</span>
       </>
     )
   }

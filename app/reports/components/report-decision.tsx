@@ -78,7 +78,7 @@ function PhotoChoice({ photos, undecided }: { photos: Photo[]; undecided: boolea
   if (photos.length === 0) return null
   return (
     <fieldset className="mt-3">
-      <legend className="text--1 text-stone">
+      <legend className="text-s text-stone">
         {undecided ? 'Photos. Tick those the public may see; look for faces first.' : 'Photos'}
       </legend>
       <ul className="mt-2 flex flex-wrap gap-3">
@@ -94,7 +94,7 @@ function PhotoChoice({ photos, undecided }: { photos: Photo[]; undecided: boolea
               />
             </a>
             {undecided && (
-              <label className="mt-1 flex items-center gap-2 text--1">
+              <label className="mt-1 flex items-center gap-2 text-s">
                 <input type="checkbox" name="photo" value={photo.storageKey} /> public
               </label>
             )}

@@ -18,7 +18,7 @@ export function ReportLines(props: {
           <li key={report.id} className="border-b border-rule py-3">
             {found.map(finding => formatFinding(finding)).join('; ')}
             <br />
-            <span className="text--1 text-stone">
+            <span className="text-s text-stone">
               {[`seen ${formatDay(report.seenOn)}`, howSeenWords[report.howSeen], by && `told by ${by}`]
                 .filter(Boolean)
                 .join(', ')}

@@ -71,7 +71,7 @@ export default function Crag({ loaderData }: Route.ComponentProps) {
           ))}
           {sectors.length === 0 && <p className="text-stone">No route is on record here yet.</p>}
         </div>
-        <aside className="text--1 text-stone">
+        <aside className="text-s text-stone">
           <h2 className="text-1 font-semibold text-slate">About this crag</h2>
           <p className="mt-2">
             {[crag.rock, crag.aspect && `faces ${crag.aspect}`].filter(Boolean).join(', ')}
@@ -113,7 +113,7 @@ function ClimbRow({ climb }: { climb: Climb }) {
         <Link to={`/climbs/${toSlug(climb.name, climb.code)}`} className="font-medium">
           {climb.name}
         </Link>{' '}
-        <span className="text--1 text-stone">
+        <span className="text-s text-stone">
           {`${climb.lengthM} m, ${formatGear(climb.points.map(point => point.kind))}, ${trafficWords[climb.traffic]}`}
         </span>
       </span>

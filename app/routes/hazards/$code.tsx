@@ -147,7 +147,7 @@ export default function HazardPage({ loaderData, actionData }: Route.ComponentPr
             )}
           </div>
           {may.warn && (
-            <p className="mt-2 text--1 text-stone">
+            <p className="mt-2 text-s text-stone">
               A first warning has fixed words, stands 7 days and while the hazard is open, and goes to an
               access officer.
             </p>
@@ -178,7 +178,7 @@ export default function HazardPage({ loaderData, actionData }: Route.ComponentPr
               </li>
             ))}
           </ul>
-          <p className="mt-2 text--1 text-stone">{`Times are in ${hazard.timeZone.replace('_', ' ')}.`}</p>
+          <p className="mt-2 text-s text-stone">{`Times are in ${hazard.timeZone.replace('_', ' ')}.`}</p>
         </div>
       </div>
     </Page>

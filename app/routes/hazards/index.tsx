@@ -80,12 +80,12 @@ function Row({ row }: { row: DangerRow }) {
           {row.climbName ?? row.cragName}
         </Link>
         <br />
-        <span className="text--1 text-stone">{row.cragName}</span>
+        <span className="text-s text-stone">{row.cragName}</span>
       </td>
       <td data-label="What">
         {row.what}
         {row.kind === 'report' && (
-          <span className="text--1 text-stone">
+          <span className="text-s text-stone">
             {row.state === 'needs_detail'
               ? ' (new, asked for detail)'
               : ` (new${row.confirmed ? '' : ', address not confirmed'})`}

@@ -79,7 +79,7 @@ export default function Point({ loaderData }: Route.ComponentProps) {
         <div>
           <PointPanel point={{ ...point, name, sharedBy: shared }} record={record} />
           {point.lapsesOn && (
-            <p className="mt-2 text--1 text-stone">{`“No fault seen” lapses on ${formatDay(point.lapsesOn)}.`}</p>
+            <p className="mt-2 text-s text-stone">{`“No fault seen” lapses on ${formatDay(point.lapsesOn)}.`}</p>
           )}
           <UrgencyPanel record={record} name={name} />
           <PhotoStrip photos={record.photos} />
@@ -99,7 +99,7 @@ export default function Point({ loaderData }: Route.ComponentProps) {
                 {look.findings.map(finding => formatFinding(finding)).join('; ')}
                 {look.findings.some(finding => finding.clearedAt !== null) && ' (mended since)'}
                 <br />
-                <span className="text--1 text-stone">
+                <span className="text-s text-stone">
                   {`${formatDay(look.seenOn)}, ${howSeenWords[look.howSeen]}${look.isCheck ? ', a check' : ''}`}
                 </span>
               </li>
@@ -122,7 +122,7 @@ export default function Point({ loaderData }: Route.ComponentProps) {
                       <Link to={`/hazards/${hazard.code}`}>{hazard.headline}</Link>
                     )}
                     <br />
-                    <span className="text--1 text-stone">
+                    <span className="text-s text-stone">
                       {`${hazardStateWords[hazard.state]}, since ${formatMoment(hazard.openedAt, point.timeZone)}`}
                     </span>
                   </li>
@@ -138,7 +138,7 @@ export default function Point({ loaderData }: Route.ComponentProps) {
                   <li key={part.id} className="border-b border-rule py-3">
                     {formatPart(part)}
                     <br />
-                    <span className="text--1 text-stone">
+                    <span className="text-s text-stone">
                       {`fitted ${formatFitted(part, formatDay)}, taken out ${formatDay(part.removedOn!)}`}
                     </span>
                   </li>
@@ -156,7 +156,7 @@ export default function Point({ loaderData }: Route.ComponentProps) {
             ))}
             {history.length === 0 && <li className="border-b border-rule py-2 text-stone">Nothing yet.</li>}
           </ul>
-          <p className="mt-2 text--1 text-stone">{`Times are in ${point.timeZone.replace('_', ' ')}.`}</p>
+          <p className="mt-2 text-s text-stone">{`Times are in ${point.timeZone.replace('_', ' ')}.`}</p>
         </div>
       </div>
     </Page>

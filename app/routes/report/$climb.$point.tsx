@@ -113,12 +113,12 @@ export default function ReportWhat({ loaderData, actionData }: Route.ComponentPr
     <>
       <StepBar back={`/report/${climb.code}`} title={point.name} note={climb.name} />
       <main className="report-sheet">
-        <p className="text--1 text-stone">{`${climb.cragName}, ${climb.name}`}</p>
+        <p className="text-s text-stone">{`${climb.cragName}, ${climb.name}`}</p>
         <h1 className="text-2 font-semibold">What is wrong?</h1>
         <Form method="post" encType="multipart/form-data">
           <FormErrors errors={errors} reason={actionData?.reason} also={actionData?.refused} />
           {known && (
-            <p className="mt-2 text--1 text-stone">{`Known already: ${known.headline}. Your look at it still helps.`}</p>
+            <p className="mt-2 text-s text-stone">{`Known already: ${known.headline}. Your look at it still helps.`}</p>
           )}
           <input type="hidden" name="clientKey" value={String(typed.clientKey ?? clientKey)} />
           <ReportQuestions parts={parts} typed={typed} errors={errors} today={today} guest={guest} />

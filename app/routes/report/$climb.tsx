@@ -45,7 +45,7 @@ export default function ReportWhich({ loaderData }: Route.ComponentProps) {
         note="not sent yet"
       />
       <main className="report-sheet">
-        <p className="text--1 text-stone">{`${climb.cragName}, ${climb.name}`}</p>
+        <p className="text-s text-stone">{`${climb.cragName}, ${climb.name}`}</p>
         <h1 className="text-2 font-semibold">Which one?</h1>
         {asked && (
           <p className="mt-2 text-oxide" role="alert">

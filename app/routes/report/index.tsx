@@ -69,7 +69,7 @@ export default function ReportWhere({ loaderData }: Route.ComponentProps) {
                 <Link to={climb.to} className="flex min-h-12 items-center gap-3 text-slate no-underline">
                   <ConditionMark state={climb.state} size={16} decorative />
                   <span className="font-medium">{climb.name}</span>
-                  <span className="text--1 text-stone">{climb.where}</span>
+                  <span className="text-s text-stone">{climb.where}</span>
                 </Link>
               </li>
             ))}
@@ -87,7 +87,7 @@ export default function ReportWhere({ loaderData }: Route.ComponentProps) {
                   className="flex min-h-12 items-center justify-between gap-3 text-slate no-underline"
                 >
                   <span className="font-medium">{one.name}</span>
-                  <span className="text--1 text-stone">{`${one.areaName}, ${one.climbs} routes`}</span>
+                  <span className="text-s text-stone">{`${one.areaName}, ${one.climbs} routes`}</span>
                 </Link>
               </li>
             ))}
