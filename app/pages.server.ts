@@ -13,6 +13,7 @@ import { clockContext, databaseContext, nonceContext, settingsContext, wakeConte
 import { findCookie, guestCookie, sessionCookie, toSetCookie } from './web/cookies'
 import { isDatabaseAway } from './web/database-away'
 import { createLimits } from './web/limits.server'
+import { networkContext } from './web/network'
 import { hashNetwork } from './web/network.server'
 import { toPlainPage } from './web/plain-page'
 import { findNonce } from './web/security.server'
@@ -43,7 +44,7 @@ function knowViewer({ db, clock }: Given): RequestHandler {
     const secrets = { session: findCookie(header, sessionCookie), guest: findCookie(header, guestCookie) }
     findViewer(db, secrets, clock())
       .catch(error => {
-        if (isDatabaseAway(error)) return nobody
+        if (isDatabaseAway(error)) return { ...nobody, away: true as const }
         throw error
       })
       .then(viewer => {
@@ -87,7 +88,9 @@ const photoForms = [
 ]
 
 /** Paths that need a named browser even before anybody signs in. */
-const namedForms = ['/sign-in', '/sign-in/code', '/report/:climb/:point', '/orders/:code/record']
+const namedForms = ['/sign-in', '/sign-in/code', '/report/:climb/:point', '/orders/:code/record'].flatMap(
+  path => [path, `${path}.data`],
+)
 
 /** The pages of the product, by the framework, behind knowing the viewer and taking photos up. */
 export function toPages(given: Given): Router {
@@ -122,6 +125,7 @@ export function toPages(given: Given): Router {
         context.set(clockContext, clock)
         context.set(settingsContext, settings)
         context.set(nonceContext, findNonce(response))
+        context.set(networkContext, hashNetwork(request.ip, settings.appSecret))
         context.set(wakeContext, given.wake)
         context.set(viewerContext, request.viewer ?? nobody)
         context.set(uploadsContext, request.uploads ?? null)

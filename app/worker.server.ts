@@ -7,6 +7,7 @@ import { inTransaction } from './db/transaction.server'
 import { toDay } from './lib/dates'
 import { mailStep } from './mail/deliveries.server'
 import { createSender } from './mail/sender.server'
+import { signInSweep } from './people/sign-in.server'
 import { toAct } from './record/acts.server'
 import { type Step, startWorker } from './record/worker.server'
 import { readMailPicture } from './reports/photo-files.server'
@@ -81,6 +82,7 @@ export function startWork(given: { db: Database; settings: Settings; clock: () =
       seldom(minute, offersStep),
       seldom(minute, lapseStep),
       seldom(10 * minute, sweepStep(settings.photoDir)),
+      seldom(60 * minute, signInSweep),
     ],
     onError: (error, step) =>
       log.warn({ err: error, step }, 'the worker could not do a step; it tries again'),
