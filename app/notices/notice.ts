@@ -1,5 +1,5 @@
-import type { Action } from '~/people/permission'
 import type { Move } from '~/lib/moves'
+import type { Action } from '~/people/permission'
 
 export const noticeKinds = [
   'first_warning',

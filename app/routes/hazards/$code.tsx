@@ -2,7 +2,8 @@ import { Form, Link, redirect, useNavigation } from 'react-router'
 import { requireCragSubject } from '~/crags/crags.server'
 import { formatCode, parseCode, toSlug } from '~/lib/code'
 import { NoticeBands } from '~/notices/components/notice-bands'
-import { noticesInForce, publishFirstWarning } from '~/notices/notices.server'
+import { noticesInForce } from '~/notices/notices.server'
+import { publishFirstWarning } from '~/notices/publish.server'
 import { requireCan, requirePerson } from '~/people/guards.server'
 import { can } from '~/people/viewer'
 import { viewerContext } from '~/people/viewer-context'
@@ -23,7 +24,7 @@ import { Button, ButtonLink } from '~/ui/button'
 import { Page } from '~/ui/page'
 import { Refused } from '~/ui/refused'
 import { formatMoment } from '~/ui/when'
-import { clockContext, databaseContext, wakeContext } from '~/web/context'
+import { clockContext, databaseContext, settingsContext, wakeContext } from '~/web/context'
 import { keepTyped } from '~/web/keep-typed.server'
 import { notFound, refuse } from '~/web/responses'
 import { orderStateWords } from '~/work/order'
@@ -89,7 +90,12 @@ export async function action(args: Route.ActionArgs) {
     const { db, viewer, hazard, subject, now } = await requireHazard(args)
     requireCan(viewer, 'warning:publish', subject, { seen: true })
     const act = toAct(now, { kind: 'person', personId: viewer.person.id })
-    const done = await publishFirstWarning(db, { hazardCode: hazard.code, viewer, act })
+    const done = await publishFirstWarning(db, {
+      hazardCode: hazard.code,
+      viewer,
+      act,
+      appUrl: args.context.get(settingsContext).appUrl,
+    })
     if (!done.ok) return refuse(done.reason)
     args.context.get(wakeContext)()
     throw redirect(`/hazards/${hazard.code}`)

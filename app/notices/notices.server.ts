@@ -1,0 +1,127 @@
+import { and, asc, desc, eq, inArray, or, type SQL, sql } from 'drizzle-orm'
+import { visibleCrags } from '~/crags/visible.server'
+import type { Queryable } from '~/db/client.server'
+import { holdingRevision, isAtCrag, isInForceAt } from '~/db/notices-in-force'
+import { anchors, areas, climbAnchors, climbs, crags } from '~/db/schema/crags'
+import { noticePlaces, noticeRevisions, notices } from '~/db/schema/notices'
+import { organisations } from '~/db/schema/people'
+import type { Viewer } from '~/people/viewer'
+import type { NoticeKind } from './notice'
+
+const columns = {
+  id: notices.id,
+  code: notices.code,
+  kind: notices.kind,
+  state: notices.state,
+  revision: notices.revision,
+  decidedByWords: notices.decidedByWords,
+  ground: notices.ground,
+  reviewOn: notices.reviewOn,
+  publishedAt: notices.publishedAt,
+  confirmedAt: notices.confirmedAt,
+  withdrawnAt: notices.withdrawnAt,
+  askedAt: notices.askedAt,
+  organisationId: notices.organisationId,
+  organisation: organisations.name,
+  headline: noticeRevisions.headline,
+  words: noticeRevisions.words,
+  lang: noticeRevisions.lang,
+  startsAt: noticeRevisions.startsAt,
+  endsAt: noticeRevisions.endsAt,
+  cragId: crags.id,
+  cragCode: crags.code,
+  cragName: crags.name,
+  timeZone: areas.timeZone,
+  climbCode: climbs.code,
+  climbName: climbs.name,
+  anchorCode: anchors.code,
+}
+
+/** A notice with its holding revision and its one place; the crag is found through whatever the place is. */
+function selectNotices(db: Queryable) {
+  const cragOf = sql`coalesce(${noticePlaces.cragId}, ${anchors.cragId}, (select crag_id from sectors where sectors.id = ${climbs.sectorId}))`
+  return db
+    .select(columns)
+    .from(notices)
+    .innerJoin(noticeRevisions, holdingRevision)
+    .innerJoin(organisations, eq(organisations.id, notices.organisationId))
+    .innerJoin(noticePlaces, eq(noticePlaces.noticeId, notices.id))
+    .leftJoin(climbs, eq(climbs.id, noticePlaces.climbId))
+    .leftJoin(anchors, eq(anchors.id, noticePlaces.anchorId))
+    .innerJoin(crags, sql`${crags.id} = ${cragOf}`)
+    .innerJoin(areas, eq(areas.id, crags.areaId))
+}
+
+type NoticeRow = Awaited<ReturnType<ReturnType<typeof selectNotices>['limit']>>[number]
+export type ShownNotice = NoticeRow
+
+/** Strongest first: what the law and the owner say, then please do not climb, hazards, first warnings, works. */
+const strength: readonly NoticeKind[] = [
+  'closed_in_law',
+  'owner_forbids',
+  'please_do_not_climb',
+  'hazard',
+  'first_warning',
+  'works',
+]
+
+const byStrength = (a: NoticeRow, b: NoticeRow) =>
+  strength.indexOf(a.kind) - strength.indexOf(b.kind) ||
+  (b.publishedAt?.getTime() ?? 0) - (a.publishedAt?.getTime() ?? 0)
+
+/** The place asked about, as a condition on `notice_places`; everywhere when nothing is asked. */
+function atPlace(given: { cragId?: string; climbId?: string; anchorIds?: string[] }): SQL | undefined {
+  const { cragId, climbId, anchorIds = [] } = given
+  const points =
+    climbId === undefined
+      ? undefined
+      : sql`(select ${climbAnchors.anchorId} from ${climbAnchors} where ${climbAnchors.climbId} = ${climbId})`
+  return or(
+    cragId === undefined ? undefined : isAtCrag(cragId),
+    climbId === undefined ? undefined : eq(noticePlaces.climbId, climbId),
+    points === undefined ? undefined : sql`${noticePlaces.anchorId} in ${points}`,
+    anchorIds.length === 0 ? undefined : inArray(noticePlaces.anchorId, anchorIds),
+  )
+}
+
+/**
+ * The notices in force that a viewer may see, strongest first, at most 200: of a crag and everything in it, of a climb
+ * and its points, of fixed points, or all.
+ */
+export async function noticesInForce(
+  db: Queryable,
+  viewer: Viewer,
+  given: { now: Date; cragId?: string; climbId?: string; anchorIds?: string[] },
+): Promise<ShownNotice[]> {
+  const rows = await selectNotices(db)
+    .where(and(isInForceAt(given.now), visibleCrags(viewer), atPlace(given)))
+    .orderBy(asc(notices.id))
+    .limit(200)
+  return [...new Map(rows.map(row => [row.id, row])).values()].sort(byStrength)
+}
+
+/** The notice of a code if the viewer may see its crag (drafts are nobody's here), else null. */
+export async function findNotice(db: Queryable, viewer: Viewer, code: string): Promise<ShownNotice | null> {
+  const [row] = await selectNotices(db)
+    .where(
+      and(eq(notices.code, code), visibleCrags(viewer), inArray(notices.state, ['published', 'withdrawn'])),
+    )
+    .limit(1)
+  return row ?? null
+}
+
+/** Every wording a notice has had, newest first. */
+export async function listRevisions(db: Queryable, noticeId: string) {
+  return await db
+    .select({
+      number: noticeRevisions.number,
+      headline: noticeRevisions.headline,
+      words: noticeRevisions.words,
+      at: noticeRevisions.at,
+      endsAt: noticeRevisions.endsAt,
+    })
+    .from(noticeRevisions)
+    .where(eq(noticeRevisions.noticeId, noticeId))
+    .orderBy(desc(noticeRevisions.number))
+    .limit(50)
+}

@@ -1,0 +1,139 @@
+import { Form, redirect, useNavigation } from 'react-router'
+import { listClimbsOf } from '~/crags/anchors.server'
+import { requireCragSubject } from '~/crags/crags.server'
+import { parseCode } from '~/lib/code'
+import { addMonths, toDay } from '~/lib/dates'
+import { toFirstWarning } from '~/notices/first-warning'
+import { noticeKindWords } from '~/notices/notice'
+import { toNoticeSchema, writtenKinds } from '~/notices/notice.schema'
+import { publishNotice } from '~/notices/publish.server'
+import { requireCan, requirePerson } from '~/people/guards.server'
+import { viewerContext } from '~/people/viewer-context'
+import { toAct } from '~/record/acts.server'
+import { findHazard } from '~/reports/hazards.server'
+import { Button } from '~/ui/button'
+import { DateField, Field, Select, TextArea } from '~/ui/field'
+import { FormErrors } from '~/ui/form-errors'
+import { Page } from '~/ui/page'
+import { clockContext, databaseContext, settingsContext, wakeContext } from '~/web/context'
+import { parseForm, readForm, toTyped } from '~/web/forms.server'
+import { keepTyped } from '~/web/keep-typed.server'
+import { invalid, notFound, refuse } from '~/web/responses'
+import type { Route } from './+types/new'
+
+export const meta: Route.MetaFunction = () => [{ title: 'Write notice · Cragfettle' }]
+
+async function requireHazard({ request, context }: Pick<Route.LoaderArgs, 'request' | 'context'>) {
+  const db = context.get(databaseContext)
+  const viewer = requirePerson(context.get(viewerContext), request)
+  const code = parseCode(new URL(request.url).searchParams.get('hazard') ?? '')
+  const hazard = code === null ? null : await findHazard(db, viewer, code)
+  if (hazard === null) throw notFound('Notices are written from a hazard’s page. Open the hazard first.')
+  requireCan(viewer, 'notice:manage', await requireCragSubject(db, hazard.cragId), { seen: true })
+  const now = context.get(clockContext)()
+  return { db, viewer, hazard, now, today: toDay(now, hazard.timeZone) }
+}
+
+export async function loader(args: Route.LoaderArgs) {
+  const { db, viewer, hazard, today } = await requireHazard(args)
+  const climbs = hazard.anchorId === null ? [] : await listClimbsOf(db, hazard.anchorId)
+  const draft = toFirstWarning({
+    kind: hazard.anchorKind ?? 'bolt',
+    mode: hazard.mode,
+    position: hazard.position ?? 'route',
+    climbs: climbs.length > 0 ? climbs.map(climb => climb.name) : [hazard.climbName ?? ''],
+    cragName: hazard.cragName,
+  })
+  return {
+    hazard: { code: hazard.code, headline: hazard.headline, cragName: hazard.cragName },
+    draft: {
+      kind: 'hazard',
+      ...draft,
+      decidedByWords: viewer.memberships[0]?.organisationName ?? '',
+      ground: hazard.headline,
+      reviewOn: addMonths(today, 2),
+      endsOn: '',
+    },
+  }
+}
+
+export async function action(args: Route.ActionArgs) {
+  const form = await readForm(args.request)
+  const typed = toTyped(form)
+  return await keepTyped(typed, async () => {
+    const { db, viewer, hazard, now, today } = await requireHazard(args)
+    const parsed = parseForm(toNoticeSchema(today), form)
+    if (!parsed.ok) return invalid(parsed)
+    const { endsOn, ...notice } = parsed.value
+    const done = await publishNotice(db, {
+      hazardCode: hazard.code,
+      viewer,
+      act: toAct(now, { kind: 'person', personId: viewer.person.id }),
+      appUrl: args.context.get(settingsContext).appUrl,
+      notice: { ...notice, endsAt: endsOn === undefined ? null : new Date(`${endsOn}T23:59:59Z`) },
+    })
+    if (!done.ok) return refuse(done.reason, typed)
+    args.context.get(wakeContext)()
+    throw redirect(`/notices/${done.noticeCode}`)
+  })
+}
+
+export default function NewNotice({ loaderData, actionData }: Route.ComponentProps) {
+  const { hazard, draft } = loaderData
+  const busy = useNavigation().state === 'submitting'
+  const errors = actionData?.errors ?? {}
+  const value = (name: keyof typeof draft) => String(actionData?.typed[name] ?? draft[name])
+  return (
+    <Page
+      title="Write notice"
+      lead={hazard.headline}
+      crumbs={[{ label: hazard.cragName }, { label: 'Hazard', to: `/hazards/${hazard.code}` }]}
+    >
+      <Form method="post" className="mt-5 grid max-w-[62ch] gap-5">
+        <FormErrors errors={errors} reason={actionData?.reason} />
+        <Select
+          label="Kind"
+          name="kind"
+          defaultValue={value('kind')}
+          options={writtenKinds.map(kind => ({ value: kind, label: noticeKindWords[kind] }))}
+          error={errors.kind}
+        />
+        <Field label="Headline" name="headline" defaultValue={value('headline')} error={errors.headline} />
+        <TextArea
+          label="What people are to know and do"
+          hint="Say what not to rely on. Recommend no other fixed point unless it was checked, with the date."
+          name="words"
+          rows={4}
+          defaultValue={value('words')}
+          error={errors.words}
+        />
+        <Field
+          label="Whose decision"
+          name="decidedByWords"
+          defaultValue={value('decidedByWords')}
+          error={errors.decidedByWords}
+        />
+        <Field label="On what ground" name="ground" defaultValue={value('ground')} error={errors.ground} />
+        <div className="grid gap-5 sm:grid-cols-2">
+          <DateField
+            label="Looked at again on"
+            name="reviewOn"
+            defaultValue={value('reviewOn')}
+            error={errors.reviewOn}
+          />
+          <DateField
+            label="Last day, if there is one"
+            name="endsOn"
+            defaultValue={value('endsOn')}
+            error={errors.endsOn}
+          />
+        </div>
+        <p>
+          <Button kind="action" pending={busy}>
+            Publish notice
+          </Button>
+        </p>
+      </Form>
+    </Page>
+  )
+}
