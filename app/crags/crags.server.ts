@@ -1,4 +1,5 @@
 import { and, asc, count, eq, inArray, isNull } from 'drizzle-orm'
+import { alias } from 'drizzle-orm/mysql-core'
 import type { Queryable } from '~/db/client.server'
 import { anchors, areas, climbs, consents, cragOrganisations, crags, sectors } from '~/db/schema/crags'
 import { organisations } from '~/db/schema/people'
@@ -11,6 +12,9 @@ export type ConditionCounts = Record<ConditionState, number>
 
 const noCounts = (): ConditionCounts => ({ severe: 0, poor: 0, fair: 0, unknown: 0, good: 0 })
 
+/** the area around an area */
+const regions = alias(areas, 'regions')
+
 const listed = {
   id: crags.id,
   code: crags.code,
@@ -18,6 +22,7 @@ const listed = {
   pos: crags.pos,
   areaName: areas.name,
   areaCode: areas.code,
+  regionName: regions.name,
   worstState: crags.worstState,
   openHazards: crags.openHazards,
   notices: crags.notices,
@@ -57,6 +62,7 @@ export interface ListedCrag {
   pos: { lon: number; lat: number }
   areaName: string
   areaCode: string
+  regionName: string | null
   worstState: ConditionState
   openHazards: number
   notices: number
@@ -70,6 +76,7 @@ export async function listCrags(db: Queryable, viewer: Viewer): Promise<ListedCr
     .select(listed)
     .from(crags)
     .innerJoin(areas, eq(areas.id, crags.areaId))
+    .leftJoin(regions, eq(regions.id, areas.parentId))
     .where(visibleCrags(viewer))
     .orderBy(asc(crags.name))
     .limit(500)
@@ -104,6 +111,7 @@ export async function findCrag(db: Queryable, viewer: Viewer, code: string) {
     })
     .from(crags)
     .innerJoin(areas, eq(areas.id, crags.areaId))
+    .leftJoin(regions, eq(regions.id, areas.parentId))
     .where(and(eq(crags.code, code), visibleCrags(viewer)))
     .limit(1)
   if (row === undefined) return null

@@ -1,11 +1,6 @@
 import { z } from 'zod'
 import { choiceField, dayField, textField } from '~/web/fields.server'
-import { noticeKinds } from './notice'
-
-/** Kinds an access officer writes; a first warning has words of its own. */
-export const writtenKinds = noticeKinds.filter(kind => kind !== 'first_warning') as [
-  Exclude<(typeof noticeKinds)[number], 'first_warning'>,
-]
+import { writtenKinds } from './notice'
 
 /** The form of a notice; `today` is the crag's day, which a review cannot lie before. */
 export function toNoticeSchema(today: string) {

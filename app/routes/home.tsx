@@ -1,4 +1,4 @@
-import { useMemo, useState } from 'react'
+import { useEffect, useMemo, useState } from 'react'
 import { Link } from 'react-router'
 import { ConditionMark } from '~/crags/components/condition-mark'
 import { ConditionsBar } from '~/crags/components/conditions-bar'
@@ -41,6 +41,7 @@ export default function Home({ loaderData }: Route.ComponentProps) {
   const { crags, points, hazards, notices } = loaderData
   const [selected, select] = useState<string | null>(null)
   const [hovered, hover] = useState<string | null>(null)
+  useScrollTo(selected)
   const mapped = useMemo(() => crags.map(toMapped), [crags])
   const [height, setHeight] = useState<'map' | 'both' | 'list'>('both')
   return (
@@ -76,11 +77,21 @@ export default function Home({ loaderData }: Route.ComponentProps) {
   )
 }
 
+/** Brings the row of a crag chosen on the map into view. */
+function useScrollTo(code: string | null): void {
+  useEffect(() => {
+    if (code !== null) document.getElementById(`crag-${code}`)?.scrollIntoView({ block: 'nearest' })
+  }, [code])
+}
+
 const toMapped = ({ code, name, pos, worstState }: ListedCrag) => ({ code, name, ...pos, state: worstState })
 
+/** The area all crags lie in, or the region around their areas. */
 function toTitle(crags: ListedCrag[]): string {
-  const areas = [...new Set(crags.map(crag => crag.areaName))]
-  return areas.length === 1 ? areas[0]! : 'Crags'
+  const areas = new Set(crags.map(crag => crag.areaName))
+  const regions = new Set(crags.map(crag => crag.regionName))
+  if (areas.size === 1) return [...areas][0]!
+  return (regions.size === 1 && [...regions][0]) || 'All crags'
 }
 
 const heights = [
@@ -128,6 +139,7 @@ function CragRow({
   const present = conditionStates.filter(state => crag.counts[state] > 0)
   return (
     <li
+      id={`crag-${crag.code}`}
       className="crag-row"
       data-selected={selected || undefined}
       onMouseEnter={() => onHover(crag.code)}

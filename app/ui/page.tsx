@@ -11,17 +11,13 @@ export function Page(props: {
   title: string
   lead?: string
   crumbs?: Crumb[]
-  wide?: boolean
   /** a list's heading rather than a place's name */
   small?: boolean
   children: ReactNode
 }) {
-  const { title, lead, crumbs = [], wide, small, children } = props
+  const { title, lead, crumbs = [], small, children } = props
   return (
-    <main
-      id="content"
-      className={`mx-auto px-4 pt-[26px] pb-12 md:px-12 ${wide ? 'max-w-[1280px]' : 'max-w-[1120px]'}`}
-    >
+    <main id="content" className="mx-auto max-w-[1280px] px-4 pt-[26px] pb-12 md:px-12">
       {crumbs.length > 0 && (
         <nav aria-label="Where this is" className="text-s text-stone">
           {crumbs.map((crumb, index) => (

@@ -33,7 +33,7 @@ const stainless = (year: number): DemoPart[] => [
 ]
 const plated: DemoPart[] = [
   { kind: 'wedge_bolt', material: 'plated_steel', sizeMm: 10 },
-  { kind: 'hanger', material: 'stainless' },
+  { kind: 'hanger', material: 'plated_steel' },
 ]
 const pair = (eye: DemoPart[], ring: DemoPart): DemoPart[] => [
   { ...eye[0]!, side: 'a' },
@@ -83,7 +83,10 @@ export const gannetWall: DemoRoute[] = [
     lengthM: 21,
     bolts: [2.6, 4.6, 6.8, 9, 11.4, 13.8, 16.4, 18.8],
     bolt: stainless(2006),
-    lowerOff: pair(stainless(2006), { kind: 'chain', material: 'stainless', sizeMm: 8, year: 2006 }),
+    lowerOff: [
+      ...pair(stainless(2006), { kind: 'chain', material: 'stainless', sizeMm: 8, year: 2006, side: 'a' }),
+      { kind: 'chain', material: 'stainless', sizeMm: 8, year: 2006, side: 'b' },
+    ],
   },
   {
     name: 'Bilge',

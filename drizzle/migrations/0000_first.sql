@@ -130,7 +130,7 @@ CREATE TABLE `crags` (
 	`sea_km` double,
 	`warm_sea` boolean NOT NULL,
 	`corrosivity` varchar(2),
-	`aspect` varchar(3),
+	`aspect` varchar(20),
 	`consent` varchar(12) NOT NULL,
 	`policy` text,
 	`approach` text,
@@ -391,7 +391,7 @@ CREATE TABLE `rating_values` (
 	`low` double NOT NULL,
 	`central` double NOT NULL,
 	`high` double NOT NULL,
-	`unit` varchar(40) NOT NULL,
+	`unit` varchar(80) NOT NULL,
 	`source` text NOT NULL,
 	`mark` varchar(10) NOT NULL,
 	CONSTRAINT `rating_values_model_id_name_pk` PRIMARY KEY(`model_id`,`name`)

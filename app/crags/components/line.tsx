@@ -138,7 +138,7 @@ function Point({
         {point.name}
       </text>
       <text x={edge + 108} y={label + 5} fontSize={14} fill="var(--stone)">
-        {point.what}
+        {shorten(point.what, point.seen === null ? 52 : 25)}
       </text>
       {point.seen && (
         <text x={width - 4} y={label + 5} textAnchor="end" fontSize={13} fill="var(--stone)">
@@ -147,6 +147,11 @@ function Point({
       )}
     </g>
   )
+}
+
+/** Words that fit beside the date; the whole stands in the point's own part of the page. */
+function shorten(words: string, most: number): string {
+  return words.length <= most ? words : `${words.slice(0, most - 1).trimEnd()}…`
 }
 
 /** What is chosen: four corner ticks, never a ring. */

@@ -60,7 +60,7 @@ export const crags = mysqlTable(
     seaKm: double('sea_km'),
     warmSea: boolean('warm_sea').notNull(),
     corrosivity: varchar('corrosivity', { length: 2 }).$type<Corrosivity>(),
-    aspect: varchar('aspect', { length: 3 }),
+    aspect: varchar('aspect', { length: 20 }),
     consent: varchar('consent', { length: 12 }).$type<(typeof consentStates)[number]>().notNull(),
     policy: text('policy'),
     approach: text('approach'),

@@ -19,7 +19,7 @@ export const ratingValues = mysqlTable(
     low: double('low').notNull(),
     central: double('central').notNull(),
     high: double('high').notNull(),
-    unit: varchar('unit', { length: 40 }).notNull(),
+    unit: varchar('unit', { length: 80 }).notNull(),
     source: text('source').notNull(),
     mark: varchar('mark', { length: 10 }).notNull(),
   },

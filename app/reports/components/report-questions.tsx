@@ -81,16 +81,18 @@ export function ReportQuestions(
         />
       </Questions>
       {props.parts.length > 1 && (
-        <Select
-          label="On which part?"
-          name="part"
-          defaultValue={one(typed, 'part') ?? ''}
-          options={[
-            { value: '', label: 'not sure' },
-            ...props.parts.map(({ id, words }) => ({ value: id, label: words })),
-          ]}
-          error={errors.part}
-        />
+        <div className="mt-6">
+          <Select
+            label="On which part?"
+            name="part"
+            defaultValue={one(typed, 'part') ?? ''}
+            options={[
+              { value: '', label: 'not sure' },
+              ...props.parts.map(({ id, words }) => ({ value: id, label: words })),
+            ]}
+            error={errors.part}
+          />
+        </div>
       )}
       <SeenQuestions {...props} />
     </>

@@ -15,6 +15,7 @@ import { PointPanel } from '~/reports/components/point-panel'
 import { UrgencyPanel } from '~/reports/components/urgency-panel'
 import { toDrawnPoint, toZones } from '~/reports/drawn-line'
 import { readPoint } from '~/reports/point-record.server'
+import { listPointWords } from '~/reports/point-words.server'
 import { ButtonLink } from '~/ui/button'
 import { Page } from '~/ui/page'
 import { clockContext, databaseContext } from '~/web/context'
@@ -41,8 +42,13 @@ export async function loader({ params, request, context }: Route.LoaderArgs) {
   const asked = parseCode(new URL(request.url).searchParams.get('point') ?? '')
   const point = climb.points.find(one => one.code === asked) ?? toWorst(climb.points)
   const subject = await requireCragSubject(db, climb.cragId)
+  const words = await listPointWords(
+    db,
+    climb.points.map(one => one.anchorId),
+  )
   return {
     climb,
+    points: climb.points.map(one => toDrawnPoint(one, words.get(one.anchorId) ?? formatGearShort(one.parts))),
     zones: toZones(climb),
     notices: await noticesInForce(db, viewer, { now, climbId: climb.id }),
     shown:
@@ -73,12 +79,11 @@ async function nameSharing(
 }
 
 export default function Climb({ loaderData }: Route.ComponentProps) {
-  const { climb, zones, notices, shown } = loaderData
+  const { climb, points, zones, notices, shown } = loaderData
   const [search] = useSearchParams()
   const length = `${climb.lengthM} m, ${formatGear(climb.points.map(point => point.kind))}, ${trafficWords[climb.traffic]}`
   return (
     <Page
-      wide
       title={climb.name}
       lead={[length, climb.grade].filter(Boolean).join(', ')}
       crumbs={[
@@ -92,13 +97,12 @@ export default function Climb({ loaderData }: Route.ComponentProps) {
         <div>
           <Line
             lengthM={climb.lengthM}
-            points={climb.points.map(point => toDrawnPoint(point, formatGearShort(point.parts)))}
+            points={points}
             zones={zones}
             ledges={climb.ledges}
             ground={climb.points[0]?.below ?? 'ground'}
             selected={shown?.point.code}
             href={code => `?point=${code}#point`}
-            size="page"
           />
           <p className="mt-5">
             <ButtonLink to={`/report/${climb.code}`} kind="quiet">

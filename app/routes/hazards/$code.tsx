@@ -23,7 +23,7 @@ import { listReportsOf } from '~/reports/reports.server'
 import { Button, ButtonLink } from '~/ui/button'
 import { Page } from '~/ui/page'
 import { Refused } from '~/ui/refused'
-import { formatMoment } from '~/ui/when'
+import { formatMoment, formatZone } from '~/ui/when'
 import { clockContext, databaseContext, settingsContext, wakeContext } from '~/web/context'
 import { keepTyped } from '~/web/keep-typed.server'
 import { notFound, refuse } from '~/web/responses'
@@ -107,7 +107,6 @@ export default function HazardPage({ loaderData, actionData }: Route.ComponentPr
   const busy = useNavigation().state === 'submitting'
   return (
     <Page
-      wide
       title={hazard.headline}
       lead={`${formatCode(hazard.code)}, ${hazardStateWords[hazard.state]}`}
       crumbs={[
@@ -184,7 +183,7 @@ export default function HazardPage({ loaderData, actionData }: Route.ComponentPr
               </li>
             ))}
           </ul>
-          <p className="mt-2 text-s text-stone">{`Times are in ${hazard.timeZone.replace('_', ' ')}.`}</p>
+          <p className="mt-2 text-s text-stone">{`Times are ${formatZone(hazard.timeZone)}.`}</p>
         </div>
       </div>
     </Page>

@@ -39,7 +39,7 @@ export default function Hazards({ loaderData }: Route.ComponentProps) {
     fresh > 0 ? `${fresh} new ${fresh === 1 ? 'report' : 'reports'}` : '',
   ]
   return (
-    <Page wide title="Hazards, most dangerous first" lead={lead.filter(Boolean).join(', ')} small>
+    <Page title="Hazards, most dangerous first" lead={lead.filter(Boolean).join(', ')} small>
       {rows.length === 0 ? (
         <Empty title="Nothing to decide, nothing open">
           New reports and open hazards of your crags stand here, most dangerous first. Climbers send them from
@@ -76,7 +76,7 @@ function Row({ row }: { row: DangerRow }) {
   return (
     <tr>
       <td data-label="Where">
-        <Link to={toAddress(row)} className="font-medium">
+        <Link to={toAddress(row)} className="plain-link font-medium">
           {row.climbName ?? row.cragName}
         </Link>
         <br />
@@ -133,15 +133,19 @@ function Row({ row }: { row: DangerRow }) {
 function OrderCell({ row }: { row: DangerRow }) {
   if (row.kind === 'report')
     return (
-      <Link to={toAddress(row)} className="font-medium text-verdigris">
+      <Link to={toAddress(row)} className="font-medium text-verdigris no-underline hover:underline">
         Decide
       </Link>
     )
   if (row.order === null)
     return (
-      <Link to={`/orders/new?hazard=${row.code}`} className="font-medium text-verdigris">
+      <Link to={`/orders/new?hazard=${row.code}`} className="font-medium text-verdigris no-underline hover:underline">
         Make order
       </Link>
     )
-  return <Link to={`/orders/${row.order.code}`}>{row.order.state}</Link>
+  return (
+    <Link to={`/orders/${row.order.code}`} className="plain-link">
+      {row.order.state}
+    </Link>
+  )
 }

@@ -19,7 +19,7 @@ import { readPoint } from '~/reports/point-record.server'
 import { howSeenWords } from '~/reports/report'
 import { ButtonLink } from '~/ui/button'
 import { Page } from '~/ui/page'
-import { formatDay, formatMoment } from '~/ui/when'
+import { formatDay, formatMoment, formatZone } from '~/ui/when'
 import { clockContext, databaseContext } from '~/web/context'
 import { notFound } from '~/web/responses'
 import type { Route } from './+types/$code'
@@ -156,7 +156,7 @@ export default function Point({ loaderData }: Route.ComponentProps) {
             ))}
             {history.length === 0 && <li className="border-b border-rule py-2 text-stone">Nothing yet.</li>}
           </ul>
-          <p className="mt-2 text-s text-stone">{`Times are in ${point.timeZone.replace('_', ' ')}.`}</p>
+          <p className="mt-2 text-s text-stone">{`Times are ${formatZone(point.timeZone)}.`}</p>
         </div>
       </div>
     </Page>

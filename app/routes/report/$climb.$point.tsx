@@ -114,7 +114,7 @@ export default function ReportWhat({ loaderData, actionData }: Route.ComponentPr
       <StepBar back={`/report/${climb.code}`} title={point.name} note={climb.name} />
       <main className="report-sheet">
         <p className="text-s text-stone">{`${climb.cragName}, ${climb.name}`}</p>
-        <h1 className="text-2 font-semibold">What is wrong?</h1>
+        <h1 className="mb-3 text-2 font-semibold">What is wrong?</h1>
         <Form method="post" encType="multipart/form-data">
           <FormErrors errors={errors} reason={actionData?.reason} also={actionData?.refused} />
           {known && (

@@ -94,7 +94,6 @@ export default function ReportPage({ loaderData, actionData }: Route.ComponentPr
   const busy = useNavigation().state === 'submitting'
   return (
     <Page
-      wide
       title={`${report.position ?? 'Report'}, ${report.climbName ?? report.cragName}`}
       lead={`report, ${reportStateWords[report.state]}`}
       crumbs={[

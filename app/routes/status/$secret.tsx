@@ -13,7 +13,7 @@ import { Button } from '~/ui/button'
 import { TextArea } from '~/ui/field'
 import { Page } from '~/ui/page'
 import { Refused } from '~/ui/refused'
-import { formatDay, formatMoment } from '~/ui/when'
+import { formatDay, formatMoment, formatZone } from '~/ui/when'
 import { clockContext, databaseContext, settingsContext, wakeContext } from '~/web/context'
 import { textField } from '~/web/fields.server'
 import { parseForm, readForm, toTyped } from '~/web/forms.server'
@@ -152,7 +152,7 @@ export default function Status({ loaderData, actionData }: Route.ComponentProps)
         </Form>
       )}
       <h2 className="mt-8 text-1 font-semibold">What you told us</h2>
-      <p className="mt-1 max-w-[62ch]">{`${found}. Seen on ${formatDay(report.seenOn)}, received ${formatMoment(report.receivedAt, report.timeZone)} (${report.timeZone.replace('_', ' ')}).`}</p>
+      <p className="mt-1 max-w-[62ch]">{`${found}. Seen on ${formatDay(report.seenOn)}, received ${formatMoment(report.receivedAt, report.timeZone)} (${formatZone(report.timeZone)}).`}</p>
       {report.words && <p className="mt-2 max-w-[62ch] whitespace-pre-line">{report.words}</p>}
       {report.climbCode && (
         <p className="mt-4">
