@@ -9,9 +9,9 @@ import {
   rmSync,
   writeFileSync,
 } from 'node:fs'
-import { createServer } from 'node:net'
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
+import { findFreePort } from './ports.mjs'
 import { Problem } from './problem.mjs'
 import { endProcess, findProcess, isRunning, listArguments } from './processes.mjs'
 
@@ -37,7 +37,7 @@ export async function requireAccess(folder) {
     ownerPassword: kept?.ownerPassword ?? randomBytes(24).toString('hex'),
     appPassword: kept?.appPassword ?? randomBytes(24).toString('hex'),
   }
-  const access = { ...known, port: (await findFreePort(known.port)) ?? (await findFreePort(0)) ?? 0 }
+  const access = { ...known, port: await findFreePort(known.port) }
   if (JSON.stringify(access) !== JSON.stringify(kept)) writeSecret(file, JSON.stringify(access))
   return access
 }
@@ -59,22 +59,6 @@ function readJson(file) {
   } catch {
     return null
   }
-}
-
-/**
- * The wanted port of loopback when it is free (0: any free one), else null.
- * @param {number} wanted
- * @returns {Promise<number | null>}
- */
-export function findFreePort(wanted) {
-  return new Promise(done => {
-    const server = createServer()
-    server.once('error', () => done(null))
-    server.listen(wanted, '127.0.0.1', () => {
-      const { port } = /** @type {import('node:net').AddressInfo} */ (server.address())
-      server.close(() => done(port))
-    })
-  })
 }
 
 /**

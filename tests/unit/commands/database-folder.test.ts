@@ -3,7 +3,7 @@ import { createServer } from 'node:net'
 import { tmpdir } from 'node:os'
 import { dirname, join } from 'node:path'
 import { afterEach, beforeEach, expect, test } from 'vitest'
-import { findFreePort, requireAccess, toSocketPath } from '../../../app/commands/database-folder.mjs'
+import { requireAccess, toSocketPath } from '../../../app/commands/database-folder.mjs'
 
 let folder: string
 beforeEach(() => {
@@ -37,14 +37,6 @@ test('a port that somebody else took meanwhile is exchanged for a free one, and 
   await new Promise(done => taker.close(done))
   expect(second).toEqual({ ...first, port: expect.not.toSatisfy((port: number) => port === first.port) })
   expect(JSON.parse(readFileSync(join(folder, 'access.json'), 'utf8'))).toEqual(second)
-})
-
-test('a port in use is not free', async () => {
-  const taker = createServer()
-  await new Promise<void>(done => taker.listen(0, '127.0.0.1', done))
-  const { port } = taker.address() as { port: number }
-  expect(await findFreePort(port)).toBeNull()
-  await new Promise(done => taker.close(done))
 })
 
 test('the socket of a folder whose path is too long for one stands in a private folder of its own', () => {
