@@ -53,5 +53,5 @@ export function toWords(code, port, host) {
     return `Port ${port} of ${host} is in use by another program. End that one, or take another port, for example: PORT=${port < 65535 ? port + 1 : 3000} npm start`
   if (code === 'EACCES')
     return `Port ${port} may only be used by root. Take one from 1024 on, for example: PORT=3000 npm start`
-  return `HOST ${host} is no address of this machine (${code}). For example: HOST=127.0.0.1 npm start`
+  return `HOST ${host} is no address of this machine (${code}). Take one that is, for example: HOST=127.0.0.1 npm start`
 }
