@@ -60,10 +60,10 @@ const sweepStep = (photoDir: string): Step => ({
 })
 
 /** Offers whose time is over end, and their orders go back to draft when no live offer is left. */
-const offersStep: Step = {
+const offersStep = (appUrl: string): Step => ({
   name: 'offers',
-  run: async ({ db, clock }) => await expireOffers(db, toAct(clock(), system)),
-}
+  run: async ({ db, clock }) => await expireOffers(db, toAct(clock(), system), appUrl),
+})
 
 /** Everything done by the clock or after a command: mails, lapses, offers that run out, sweeping. */
 export function startWork(given: { db: Database; settings: Settings; clock: () => Date }) {
@@ -79,7 +79,7 @@ export function startWork(given: { db: Database; settings: Settings; clock: () =
     clock,
     steps: [
       mailStep(sender, failure => log.warn(failure, 'a mail could not leave')),
-      seldom(minute, offersStep),
+      seldom(minute, offersStep(settings.appUrl)),
       seldom(minute, lapseStep),
       seldom(10 * minute, sweepStep(settings.photoDir)),
       seldom(60 * minute, signInSweep),

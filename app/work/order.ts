@@ -1,5 +1,5 @@
-import type { Action } from '~/people/permission'
 import type { Move } from '~/lib/moves'
+import type { Action } from '~/people/permission'
 
 export const orderStates = ['draft', 'offered', 'accepted', 'done', 'checked', 'closed', 'cancelled'] as const
 export type OrderState = (typeof orderStates)[number]
@@ -19,7 +19,12 @@ export const orderMoves: readonly Move<OrderState, Action>[] = [
   { from: 'offered', to: 'accepted', may: 'offer:answer' },
   { from: 'offered', to: 'draft', may: 'system', needs: 'no live offer left' },
   { from: 'accepted', to: 'draft', may: 'work:record', needs: 'a word why' },
-  { from: 'accepted', to: 'done', may: 'work:record', needs: 'what was fitted, and a photo or a reason for none' },
+  {
+    from: 'accepted',
+    to: 'done',
+    may: 'work:record',
+    needs: 'what was fitted, and a photo or a reason for none',
+  },
   { from: 'done', to: 'checked', may: 'check:make', needs: 'somebody who did not do it' },
   { from: 'done', to: 'accepted', may: 'check:make', needs: 'what is to be done again' },
   { from: 'checked', to: 'closed', may: 'order:manage' },

@@ -1,0 +1,214 @@
+import { redirect, useNavigation } from 'react-router'
+import { findConsent, requireCragSubject } from '~/crags/crags.server'
+import { formatPart } from '~/crags/part'
+import { formatCode, parseCode, toSlug } from '~/lib/code'
+import { requireCan, requirePerson } from '~/people/guards.server'
+import { can } from '~/people/viewer'
+import { viewerContext } from '~/people/viewer-context'
+import { listActivities } from '~/record/activities.server'
+import { toAct } from '~/record/acts.server'
+import { formatActivity } from '~/reports/activity-words'
+import { toReportLinks } from '~/reports/links.server'
+import { listPhotos } from '~/reports/photos.server'
+import { Page } from '~/ui/page'
+import { Refused } from '~/ui/refused'
+import { formatDay, formatMoment, formatZone } from '~/ui/when'
+import { clockContext, databaseContext, settingsContext, wakeContext } from '~/web/context'
+import { parseForm, readForm, toTyped } from '~/web/forms.server'
+import { keepTyped } from '~/web/keep-typed.server'
+import { invalid, notFound, refuse } from '~/web/responses'
+import { closeOrder } from '~/work/close.server'
+import { Fact, JobFacts } from '~/work/components/job-facts'
+import { OrderMoves } from '~/work/components/order-moves'
+import { WorkCaution } from '~/work/components/work-caution'
+import { cancelOrder, handBack } from '~/work/hand-back.server'
+import { offerOrder } from '~/work/offer.server'
+import { orderStateWords } from '~/work/order'
+import { closeSchema, offerSchema, wordsSchema } from '~/work/order.schema'
+import { findOrder, findRecord, listNeededParts, listOffers, listRebolters } from '~/work/orders.server'
+import { checkerWords, checkMethodWords, offerStateWords } from '~/work/words'
+import type { Route } from './+types/$code'
+
+export const meta: Route.MetaFunction = ({ loaderData }) => [
+  { title: `${loaderData?.order.title ?? 'Order'} · Cragfettle` },
+]
+
+async function requireOrder({
+  request,
+  params,
+  context,
+}: Pick<Route.LoaderArgs, 'request' | 'params' | 'context'>) {
+  const db = context.get(databaseContext)
+  const viewer = requirePerson(context.get(viewerContext), request)
+  const code = parseCode(params.code)
+  const order = code === null ? null : await findOrder(db, viewer, code)
+  if (order === null) throw notFound('No order of your organisation carries this code.')
+  const subject = await requireCragSubject(db, order.cragId)
+  requireCan(viewer, 'order:see', subject, { seen: false })
+  return { db, viewer, order, subject }
+}
+
+export async function loader(args: Route.LoaderArgs) {
+  const { db, viewer, order, subject } = await requireOrder(args)
+  const record = await findRecord(db, order.id)
+  const manages = can(viewer, 'order:manage', subject)
+  return {
+    order,
+    needed: await listNeededParts(db, order.id),
+    consent: (await findConsent(db, order.cragId))?.conditions ?? null,
+    offers: await listOffers(db, order.id),
+    rebolters: manages && order.state === 'draft' ? await listRebolters(db, order.organisationId) : [],
+    record,
+    photos: record === null ? [] : await listPhotos(db, { workRecordIds: [record.id] }),
+    history: (await listActivities(db, [order.id], { publicOnly: false })).map(line => ({
+      id: line.id,
+      at: line.at,
+      words: formatActivity(line),
+    })),
+    may: {
+      manage: manages,
+      record: order.state === 'accepted' && order.workerId === viewer.person.id,
+      check:
+        order.state === 'done' &&
+        record !== null &&
+        record.by !== viewer.person.id &&
+        can(viewer, 'check:make', subject),
+    },
+  }
+}
+
+export async function action(args: Route.ActionArgs) {
+  const form = await readForm(args.request)
+  const typed = toTyped(form)
+  return await keepTyped(typed, async () => {
+    const { db, viewer, order, subject } = await requireOrder(args)
+    const { person } = viewer
+    const act = toAct(args.context.get(clockContext)(), {
+      kind: 'person',
+      personId: person.id,
+      organisationId: order.organisationId,
+    })
+    const { appUrl } = args.context.get(settingsContext)
+    const orderId = order.id
+    const manage = () => requireCan(viewer, 'order:manage', subject, { seen: true })
+    const doing = String(form.get('do') ?? '')
+    async function doIt() {
+      if (doing === 'hand_back') {
+        requireCan(viewer, 'work:record', subject, { seen: true })
+        const parsed = parseForm(wordsSchema, form)
+        return parsed.ok
+          ? await handBack(db, { orderId, words: parsed.value.words, who: person.name, act, appUrl })
+          : parsed
+      }
+      manage()
+      if (doing === 'cancel') return await cancelOrder(db, { orderId, act })
+      if (doing === 'close') {
+        const parsed = parseForm(closeSchema, form)
+        const links = toReportLinks(args.context.get(settingsContext))
+        return parsed.ok
+          ? await closeOrder(db, { orderId, act, links, publicPhotoKeys: parsed.value.photo })
+          : parsed
+      }
+      const parsed = parseForm(offerSchema, form)
+      return parsed.ok
+        ? await offerOrder(db, { orderId, personId: parsed.value.personId, act, appUrl })
+        : parsed
+    }
+    const done = await doIt()
+    if (!done.ok) return 'errors' in done ? invalid(done) : refuse(done.reason, typed)
+    args.context.get(wakeContext)()
+    throw redirect(`/orders/${order.code}`)
+  })
+}
+
+export default function OrderPage({ loaderData, actionData }: Route.ComponentProps) {
+  const { order, needed, consent, offers, rebolters, record, photos, history, may } = loaderData
+  const busy = useNavigation().state === 'submitting'
+  return (
+    <Page
+      title={order.title}
+      lead={`${formatCode(order.code)}, ${orderStateWords[order.state]}`}
+      crumbs={[
+        { label: 'Work', to: '/orders' },
+        { label: order.cragName, to: `/crags/${toSlug(order.cragName, order.cragCode)}` },
+        ...order.hazards.slice(0, 1).map(hazard => ({ label: 'Hazard', to: `/hazards/${hazard.code}` })),
+      ]}
+    >
+      {actionData?.reason && <Refused reason={actionData.reason} />}
+      <div className="mt-2 grid gap-x-11 gap-y-8 lg:grid-cols-[1.2fr_1fr]">
+        <div>
+          <JobFacts job={order} needed={needed} consent={consent} />
+          <WorkCaution />
+          {record !== null && (
+            <section className="mt-8" aria-labelledby="record">
+              <h2 id="record" className="text-1 font-semibold">
+                What was done
+              </h2>
+              <dl className="mt-2 border-b border-rule">
+                <Fact word="Done">{`${formatDay(record.doneOn)}, ${record.name}${record.minutes ? `, ${record.minutes} min` : ''}`}</Fact>
+                <Fact word="Fitted">
+                  {record.fitted.flatMap(part =>
+                    part.kind === null
+                      ? []
+                      : [
+                          <div key={part.kind}>
+                            {formatPart({ ...part, kind: part.kind, material: part.material ?? 'unknown' })}
+                          </div>,
+                        ],
+                  )}
+                  {record.fitted.every(part => part.kind === null) && 'nothing'}
+                </Fact>
+                {record.words && <Fact word="Words">{record.words}</Fact>}
+                {record.noPhotoReason && <Fact word="No photo">{record.noPhotoReason}</Fact>}
+                {record.checks.map(check => (
+                  <Fact key={check.at.getTime()} word="Checked">
+                    {`${check.outcome === 'good' ? 'in order' : 'returned'}, ${checkMethodWords[check.how]}, ${check.name} (${checkerWords[check.whoKind]})`}
+                    {check.words && <div>{check.words}</div>}
+                  </Fact>
+                ))}
+              </dl>
+            </section>
+          )}
+        </div>
+        <div>
+          <OrderMoves
+            code={order.code}
+            state={order.state}
+            may={may}
+            rebolters={rebolters.map(({ id, name }) => ({ id, name }))}
+            photos={photos}
+            errors={actionData?.errors ?? {}}
+            typed={actionData?.typed ?? {}}
+            busy={busy}
+          />
+          {offers.length > 0 && (
+            <>
+              <h2 className="mt-8 text-1 font-semibold">Offers</h2>
+              <ul className="mt-2 border-t border-slate">
+                {offers.map(offer => (
+                  <li key={offer.id} className="border-b border-rule py-2">
+                    {`${offer.name}: ${offerStateWords[offer.state]}`}
+                    {offer.state === 'sent' && (
+                      <span className="text-stone">{`, until ${formatMoment(offer.expiresAt, order.timeZone)}`}</span>
+                    )}
+                    {offer.words && <div className="text-stone">{offer.words}</div>}
+                  </li>
+                ))}
+              </ul>
+            </>
+          )}
+          <h2 className="mt-8 text-1 font-semibold">History</h2>
+          <ul className="mt-2 border-t border-slate">
+            {history.map(line => (
+              <li key={line.id} className="flex gap-4 border-b border-rule py-2">
+                <span className="w-40 shrink-0 text-stone">{formatMoment(line.at, order.timeZone)}</span>
+                <span>{line.words}</span>
+              </li>
+            ))}
+          </ul>
+          <p className="mt-2 text-s text-stone">{`Times are ${formatZone(order.timeZone)}.`}</p>
+        </div>
+      </div>
+    </Page>
+  )
+}

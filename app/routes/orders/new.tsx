@@ -1,0 +1,153 @@
+import { Form, redirect, useNavigation } from 'react-router'
+import { requireCragSubject } from '~/crags/crags.server'
+import { parseCode } from '~/lib/code'
+import { toDay } from '~/lib/dates'
+import { requireCan, requirePerson } from '~/people/guards.server'
+import { viewerContext } from '~/people/viewer-context'
+import { toAct } from '~/record/acts.server'
+import { findHazard } from '~/reports/hazards.server'
+import { Button } from '~/ui/button'
+import { DateField, Field, Select, TextArea } from '~/ui/field'
+import { FormErrors } from '~/ui/form-errors'
+import { Page } from '~/ui/page'
+import { clockContext, databaseContext } from '~/web/context'
+import { parseForm, readForm, toTyped } from '~/web/forms.server'
+import { keepTyped } from '~/web/keep-typed.server'
+import { invalid, notFound, refuse } from '~/web/responses'
+import { PartFields } from '~/work/components/part-fields'
+import { jobKinds, jobKindWords, toUsualJob } from '~/work/job'
+import { makeOrder } from '~/work/make.server'
+import { toOrderSchema } from '~/work/order.schema'
+import type { Route } from './+types/new'
+
+export const meta: Route.MetaFunction = () => [{ title: 'Make order · Cragfettle' }]
+
+async function requireHazard({ request, context }: Pick<Route.LoaderArgs, 'request' | 'context'>) {
+  const db = context.get(databaseContext)
+  const viewer = requirePerson(context.get(viewerContext), request)
+  const code = parseCode(new URL(request.url).searchParams.get('hazard') ?? '')
+  const hazard = code === null ? null : await findHazard(db, viewer, code)
+  if (hazard === null) throw notFound('Orders are made from a hazard’s page. Open the hazard first.')
+  const subject = await requireCragSubject(db, hazard.cragId)
+  requireCan(viewer, 'order:manage', subject, { seen: true })
+  const organisationId = subject.crag.organisations.find(
+    held =>
+      held.remit === 'rebolting' &&
+      viewer.memberships.some(membership => membership.organisationId === held.organisationId),
+  )!.organisationId
+  return { db, viewer, hazard, organisationId, today: toDay(context.get(clockContext)(), hazard.timeZone) }
+}
+
+export async function loader(args: Route.LoaderArgs) {
+  const { hazard } = await requireHazard(args)
+  return {
+    hazard: {
+      code: hazard.code,
+      headline: hazard.headline,
+      cragName: hazard.cragName,
+      climbName: hazard.climbName,
+    },
+    kind: toUsualJob(hazard.mode, hazard.anchorKind),
+    consentUnknown: hazard.consent === 'unknown',
+  }
+}
+
+export async function action(args: Route.ActionArgs) {
+  const form = await readForm(args.request)
+  const typed = toTyped(form)
+  return await keepTyped(typed, async () => {
+    const { db, viewer, hazard, organisationId, today } = await requireHazard(args)
+    const parsed = parseForm(toOrderSchema({ today, consentUnknown: hazard.consent === 'unknown' }), form)
+    if (!parsed.ok) return invalid(parsed)
+    const { partKind, partMaterial, partSize, partQuantity, ...order } = parsed.value
+    const done = await makeOrder(db, {
+      hazardId: hazard.id,
+      organisationId,
+      kind: order.kind,
+      what: order.what,
+      aimOn: order.aimOn ?? null,
+      consentReason: order.consentReason ?? null,
+      parts:
+        partKind === undefined
+          ? []
+          : [
+              {
+                kind: partKind,
+                material: partMaterial ?? 'unknown',
+                sizeMm: partSize ?? null,
+                quantity: partQuantity ?? 1,
+              },
+            ],
+      act: toAct(args.context.get(clockContext)(), {
+        kind: 'person',
+        personId: viewer.person.id,
+        organisationId,
+      }),
+    })
+    if (!done.ok) return refuse(done.reason, typed)
+    throw redirect(`/orders/${done.code}`)
+  })
+}
+
+export default function NewOrder({ loaderData, actionData }: Route.ComponentProps) {
+  const { hazard, kind, consentUnknown } = loaderData
+  const busy = useNavigation().state === 'submitting'
+  const errors = actionData?.errors ?? {}
+  const typed = actionData?.typed ?? {}
+  const value = (name: string, before = '') => String(typed[name] ?? before)
+  return (
+    <Page
+      title="Make order"
+      lead={`${hazard.climbName}, ${hazard.cragName}`}
+      crumbs={[
+        { label: 'Hazards', to: '/hazards' },
+        { label: hazard.headline, to: `/hazards/${hazard.code}` },
+      ]}
+    >
+      <Form method="post" className="mt-5 grid max-w-[62ch] gap-5">
+        <FormErrors errors={errors} reason={actionData?.reason} />
+        <Select
+          label="Kind of job"
+          name="kind"
+          defaultValue={value('kind', kind)}
+          options={jobKinds.map(one => ({ value: one, label: jobKindWords[one] }))}
+          error={errors.kind}
+        />
+        <TextArea
+          label="What is to be done"
+          hint="As it stands on the sheet, for example: Replace the worn ring by a titanium ring of 12 mm."
+          name="what"
+          rows={3}
+          defaultValue={value('what')}
+          error={errors.what}
+        />
+        <PartFields typed={typed} errors={errors} none="no part needed" />
+        <div className="grid gap-5 sm:grid-cols-2">
+          <Field
+            label="How many"
+            name="partQuantity"
+            inputMode="numeric"
+            defaultValue={value('partQuantity', '1')}
+            error={errors.partQuantity}
+          />
+          <DateField label="To be done by" name="aimOn" defaultValue={value('aimOn')} error={errors.aimOn} />
+        </div>
+        {consentUnknown && (
+          <TextArea
+            label="Why the work goes on although consent is not known"
+            hint="Prints on the sheet."
+            name="consentReason"
+            rows={2}
+            defaultValue={value('consentReason')}
+            error={errors.consentReason}
+          />
+        )}
+        <p>
+          <Button kind="action" pending={busy}>
+            Make order
+          </Button>
+        </p>
+      </Form>
+    </Page>
+  )
+}

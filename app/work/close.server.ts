@@ -1,0 +1,146 @@
+import { and, eq, isNull } from 'drizzle-orm'
+import { formatPart } from '~/crags/part'
+import { addPart } from '~/crags/places.server'
+import type { Database, Transaction } from '~/db/client.server'
+import { parts } from '~/db/schema/crags'
+import { inCommand, Refusal } from '~/db/transaction.server'
+import { queueMail } from '~/mail/outbox.server'
+import { endFirstWarnings } from '~/notices/end.server'
+import type { Act } from '~/record/act'
+import { writeActivity } from '~/record/activities.server'
+import { recordCheck } from '~/reports/checks.server'
+import { clearFindings } from '~/reports/findings.server'
+import { type Hazard, listHazardReporters, moveHazard } from '~/reports/hazards.server'
+import type { ReportLinks } from '~/reports/links.server'
+import { listPhotos, publishPhotos } from '~/reports/photos.server'
+import { refreshAnchors } from '~/reports/refresh.server'
+import { toThanksMail } from './mails'
+import { moveOrder, requireOrder } from './move.server'
+import type { CheckMethod } from './order'
+import { findOrderById, findRecord, lockAnchors, toPlace } from './orders.server'
+
+type Recorded = NonNullable<Awaited<ReturnType<typeof findRecord>>>
+
+/** Takes replaced parts off the record and puts on it what was fitted, from the day of the work. */
+async function renewParts(tx: Transaction, act: Act, record: Recorded): Promise<void> {
+  for (const fitted of record.fitted) {
+    if (fitted.replaces !== null)
+      await tx
+        .update(parts)
+        .set({ removedOn: record.doneOn, removedByRecord: record.id, updatedAt: act.now })
+        .where(
+          and(eq(parts.id, fitted.replaces), eq(parts.anchorId, record.anchorId), isNull(parts.removedOn)),
+        )
+    if (fitted.kind === null) continue
+    await addPart(tx, act, record.anchorId, {
+      kind: fitted.kind,
+      material: fitted.material ?? 'unknown',
+      side: fitted.side,
+      sizeMm: fitted.sizeMm,
+      marking: fitted.marking,
+      fittedOn: record.doneOn,
+      fittedPrecision: 'day',
+      fittedByRecord: record.id,
+    })
+  }
+}
+
+/** The check of the work stands at the fixed point: somebody trained saw nothing wrong, on the day of the check. */
+async function putCheckOnRecord(tx: Transaction, act: Act, hazard: Hazard, record: Recorded): Promise<void> {
+  const check = record.checks[0]
+  if (check === undefined || hazard.anchorId === null) return
+  const seen: Record<CheckMethod, 'on_it' | 'photo'> = {
+    on_the_rope: 'on_it',
+    load_test: 'on_it',
+    from_photos: 'photo',
+  }
+  await recordCheck(tx, act, {
+    cragId: hazard.cragId,
+    climbId: hazard.climbId,
+    anchorId: hazard.anchorId,
+    personId: check.by,
+    seenOn: check.at.toISOString().slice(0, 10),
+    howSeen: seen[check.how],
+  })
+}
+
+async function thankReporters(
+  tx: Transaction,
+  act: Act,
+  hazard: Hazard,
+  record: Recorded,
+  picture: { storageKey: string } | null,
+  links: ReportLinks,
+): Promise<void> {
+  const fitted = record.fitted
+    .flatMap(part =>
+      part.kind === null
+        ? []
+        : [{ kind: part.kind, material: part.material ?? ('unknown' as const), sizeMm: part.sizeMm }],
+    )
+    .map(formatPart)
+    .join('; ')
+  for (const to of await listHazardReporters(tx, hazard.id)) {
+    const statusUrl = `${links.appUrl}/status/${links.toStatusSecret(to.reportId)}`
+    const mail = toThanksMail({
+      hazardId: hazard.id,
+      reportId: to.reportId,
+      to,
+      place: toPlace(hazard),
+      fitted,
+      statusUrl,
+      picture,
+    })
+    await queueMail(tx, act, mail)
+  }
+}
+
+/**
+ * Closes a checked order with everything that follows, or none of it: hazards cleared, what was found there cleared by
+ * this work, parts renewed on record, the check put on record, conditions worked out anew, first warnings ended (of
+ * other notices the access officer is asked), the photos chosen let out, reporters thanked with a picture.
+ */
+export async function closeOrder(
+  db: Database,
+  given: { orderId: string; act: Act; links: ReportLinks; publicPhotoKeys: string[] },
+) {
+  const { orderId, act, links } = given
+  return await inCommand(db, async tx => {
+    const before = await findOrderById(tx, orderId)
+    if (before === null) throw new Refusal('This order is no longer on record.')
+    const anchorIds = await lockAnchors(tx, before.hazards)
+    const order = await requireOrder(tx, orderId)
+    await moveOrder(tx, act, order, 'closed', { verb: 'closed', set: { closedAt: act.now }, public: true })
+    const record = await findRecord(tx, orderId)
+    if (record === null) throw new Refusal('Nothing has been recorded for this order yet.')
+    const shown = (await listPhotos(tx, { workRecordIds: [record.id] })).filter(photo =>
+      given.publicPhotoKeys.includes(photo.storageKey),
+    )
+    await publishPhotos(
+      tx,
+      act,
+      shown.map(photo => photo.storageKey),
+    )
+    await renewParts(tx, act, record)
+    for (const hazard of order.hazards) {
+      await moveHazard(tx, act, hazard.id, { from: ['mended'], to: 'cleared', verb: 'cleared' })
+      await clearFindings(tx, act, { hazardId: hazard.id, byRecordId: record.id })
+      await putCheckOnRecord(tx, act, hazard, record)
+      await thankReporters(tx, act, hazard, record, shown[0] ?? null, links)
+    }
+    await endFirstWarnings(tx, act, {
+      hazardIds: order.hazards.map(hazard => hazard.id),
+      appUrl: links.appUrl,
+    })
+    await refreshAnchors(tx, act, anchorIds)
+    for (const anchorId of anchorIds)
+      await writeActivity(tx, act, {
+        verb: 'renewed',
+        subjectKind: 'anchor',
+        subjectId: anchorId,
+        cragId: order.cragId,
+        public: true,
+      })
+    return {}
+  })
+}

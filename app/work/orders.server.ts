@@ -1,0 +1,262 @@
+import { and, asc, desc, eq, inArray, isNull, ne } from 'drizzle-orm'
+import type { Queryable } from '~/db/client.server'
+import { anchors, areas, crags } from '~/db/schema/crags'
+import { membershipRoles, memberships, organisations, people } from '~/db/schema/people'
+import {
+  offers,
+  orderHazards,
+  orderParts,
+  orders,
+  workChecks,
+  workParts,
+  workRecords,
+} from '~/db/schema/work'
+import type { Viewer } from '~/people/viewer'
+import { type Hazard, listHazardsById } from '~/reports/hazards.server'
+import { jobKindWords } from './job'
+
+/** The organisations whose orders the viewer may see. */
+export function listWorkingFor(viewer: Viewer): string[] {
+  return viewer.memberships
+    .filter(({ roles }) => roles.includes('rebolter') || roles.includes('coordinator'))
+    .map(({ organisationId }) => organisationId)
+}
+
+const columns = {
+  id: orders.id,
+  code: orders.code,
+  organisationId: orders.organisationId,
+  organisation: organisations.name,
+  cragId: orders.cragId,
+  cragName: crags.name,
+  cragCode: crags.code,
+  areaCode: areas.code,
+  timeZone: areas.timeZone,
+  approach: crags.approach,
+  kind: orders.kind,
+  state: orders.state,
+  aimOn: orders.aimOn,
+  what: orders.what,
+  consentReason: orders.consentReason,
+  madeBy: orders.madeBy,
+  workerId: orders.workerId,
+  closedAt: orders.closedAt,
+  createdAt: orders.createdAt,
+}
+
+function selectOrders(db: Queryable) {
+  return db
+    .select(columns)
+    .from(orders)
+    .innerJoin(organisations, eq(organisations.id, orders.organisationId))
+    .innerJoin(crags, eq(crags.id, orders.cragId))
+    .innerJoin(areas, eq(areas.id, crags.areaId))
+}
+
+type OrderRow = Awaited<ReturnType<ReturnType<typeof selectOrders>['limit']>>[number]
+
+async function withHazards<Row extends OrderRow>(db: Queryable, rows: Row[]) {
+  if (rows.length === 0) return []
+  const links = await db
+    .select({ orderId: orderHazards.orderId, hazardId: orderHazards.hazardId })
+    .from(orderHazards)
+    .where(
+      inArray(
+        orderHazards.orderId,
+        rows.map(row => row.id),
+      ),
+    )
+  const hazards = new Map(
+    (
+      await listHazardsById(
+        db,
+        links.map(link => link.hazardId),
+      )
+    ).map(one => [one.id, one]),
+  )
+  return rows.map(row => {
+    const mine = links
+      .filter(link => link.orderId === row.id)
+      .flatMap(link => hazards.get(link.hazardId) ?? [])
+    return { ...row, hazards: mine, title: toTitle(row, mine) }
+  })
+}
+
+/** "Replace ring or link, lower-off of Slack Water, Gannet Wall". */
+function toTitle(row: OrderRow, hazards: Hazard[]): string {
+  return [jobKindWords[row.kind], hazards[0] && toPlace(hazards[0])].filter(Boolean).join(', ')
+}
+
+/** "lower-off of Slack Water, Gannet Wall". */
+export function toPlace(hazard: Pick<Hazard, 'position' | 'climbName' | 'cragName'>): string {
+  return `${(hazard.position ?? 'somewhere').toLowerCase()} of ${hazard.climbName ?? hazard.cragName}, ${hazard.cragName}`
+}
+
+/** The orders of the viewer's organisations, newest first, at most 300. */
+export async function listOrders(db: Queryable, viewer: Viewer) {
+  const mine = listWorkingFor(viewer)
+  if (mine.length === 0) return []
+  const rows = await selectOrders(db)
+    .where(inArray(orders.organisationId, mine))
+    .orderBy(desc(orders.createdAt))
+    .limit(300)
+  return await withHazards(db, rows)
+}
+
+/** The orders that stand or stood for a hazard, newest first. */
+export async function listOrdersOf(db: Queryable, hazardId: string) {
+  return await db
+    .select({ code: orders.code, state: orders.state })
+    .from(orderHazards)
+    .innerJoin(orders, eq(orders.id, orderHazards.orderId))
+    .where(eq(orderHazards.hazardId, hazardId))
+    .orderBy(desc(orders.createdAt))
+    .limit(50)
+}
+
+/** The order of an id with its hazards, whoever asks: for commands and mailed links. Else null. */
+export async function findOrderById(db: Queryable, id: string) {
+  const [row] = await withHazards(db, await selectOrders(db).where(eq(orders.id, id)).limit(1))
+  return row ?? null
+}
+
+export type Order = NonNullable<Awaited<ReturnType<typeof findOrderById>>>
+
+/** The order of a code if it is one of the viewer's organisations', else null. */
+export async function findOrder(db: Queryable, viewer: Viewer, code: string): Promise<Order | null> {
+  const mine = listWorkingFor(viewer)
+  if (mine.length === 0) return null
+  const [row] = await withHazards(
+    db,
+    await selectOrders(db)
+      .where(and(eq(orders.code, code), inArray(orders.organisationId, mine)))
+      .limit(1),
+  )
+  return row ?? null
+}
+
+/** The parts an order needs. */
+export async function listNeededParts(db: Queryable, orderId: string) {
+  return await db
+    .select({
+      kind: orderParts.kind,
+      material: orderParts.material,
+      sizeMm: orderParts.sizeMm,
+      quantity: orderParts.quantity,
+    })
+    .from(orderParts)
+    .where(eq(orderParts.orderId, orderId))
+    .orderBy(asc(orderParts.id))
+    .limit(50)
+}
+
+/** Every offer of an order, newest first, with whom it went to. */
+export async function listOffers(db: Queryable, orderId: string) {
+  return await db
+    .select({
+      id: offers.id,
+      personId: offers.personId,
+      name: people.name,
+      state: offers.state,
+      expiresAt: offers.expiresAt,
+      words: offers.words,
+    })
+    .from(offers)
+    .innerJoin(people, eq(people.id, offers.personId))
+    .where(eq(offers.orderId, orderId))
+    .orderBy(desc(offers.createdAt))
+    .limit(50)
+}
+
+/** The newest record of work on an order with what was fitted and its checks, or null. */
+export async function findRecord(db: Queryable, orderId: string) {
+  const [record] = await db
+    .select({
+      id: workRecords.id,
+      anchorId: workRecords.anchorId,
+      by: workRecords.by,
+      name: people.name,
+      doneOn: workRecords.doneOn,
+      minutes: workRecords.minutes,
+      words: workRecords.words,
+      noPhotoReason: workRecords.noPhotoReason,
+      outcome: workRecords.outcome,
+    })
+    .from(workRecords)
+    .innerJoin(people, eq(people.id, workRecords.by))
+    .where(eq(workRecords.orderId, orderId))
+    .orderBy(desc(workRecords.createdAt))
+    .limit(1)
+  if (record === undefined) return null
+  const fitted = await db
+    .select({
+      replaces: workParts.replaces,
+      side: workParts.side,
+      kind: workParts.kind,
+      material: workParts.material,
+      sizeMm: workParts.sizeMm,
+      marking: workParts.marking,
+    })
+    .from(workParts)
+    .where(eq(workParts.workRecordId, record.id))
+    .orderBy(asc(workParts.id))
+  const checks = await db
+    .select({
+      by: workChecks.by,
+      name: people.name,
+      whoKind: workChecks.whoKind,
+      how: workChecks.how,
+      outcome: workChecks.outcome,
+      words: workChecks.words,
+      at: workChecks.at,
+    })
+    .from(workChecks)
+    .innerJoin(people, eq(people.id, workChecks.by))
+    .where(eq(workChecks.workRecordId, record.id))
+    .orderBy(desc(workChecks.at))
+  return { ...record, fitted, checks }
+}
+
+/** The organisation's rebolters, of age, whom a job can be offered to. */
+export async function listRebolters(db: Queryable, organisationId: string) {
+  const rows = await db
+    .selectDistinct({ id: people.id, name: people.name, email: people.email })
+    .from(memberships)
+    .innerJoin(membershipRoles, eq(membershipRoles.membershipId, memberships.id))
+    .innerJoin(people, eq(people.id, memberships.personId))
+    .where(
+      and(
+        eq(memberships.organisationId, organisationId),
+        isNull(memberships.endedAt),
+        eq(membershipRoles.role, 'rebolter'),
+        eq(people.over18, true),
+      ),
+    )
+    .orderBy(asc(people.name))
+    .limit(200)
+  return rows.flatMap(row => (row.email === null ? [] : [{ ...row, email: row.email }]))
+}
+
+/** A person's name and address for a mail, or null once erased. */
+export async function findAddress(db: Queryable, personId: string | null) {
+  if (personId === null) return null
+  const [row] = await db
+    .select({ id: people.id, name: people.name, email: people.email })
+    .from(people)
+    .where(eq(people.id, personId))
+    .limit(1)
+  return row?.email == null ? null : { ...row, email: row.email }
+}
+
+/** Locks the fixed points of an order's hazards, lowest id first: the first thing every command of work does. */
+export async function lockAnchors(tx: Queryable, hazards: Pick<Hazard, 'anchorId'>[]): Promise<string[]> {
+  const ids = [...new Set(hazards.flatMap(hazard => hazard.anchorId ?? []))].sort()
+  if (ids.length > 0)
+    await tx
+      .select({ id: anchors.id })
+      .from(anchors)
+      .where(and(inArray(anchors.id, ids), ne(anchors.life, 'removed')))
+      .orderBy(asc(anchors.id))
+      .for('update')
+  return ids
+}
