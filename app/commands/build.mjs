@@ -28,16 +28,18 @@ export function buildApp() {
 }
 
 /**
- * Draws the ground of the map into `file`, when it is missing or its sources have changed. `script` is the built one,
- * or in development the source.
+ * Draws the ground of the map into `file`, when it is missing or its sources have changed: by the build, or in
+ * development from the sources.
  * @param {string} file
- * @param {string[]} [script]
+ * @param {{ isFromSource?: boolean }} [options]
  */
-export function buildGround(file, script = ['app/commands/ground.mjs']) {
+export function buildGround(file, { isFromSource = false } = {}) {
+  const draw = 'app/commands/ground.mjs'
+  const given = isFromSource ? ['--import', 'tsx', draw, file, 'tiles/build.ts'] : [draw, file]
   return makeWhenChanged({ stamp: `${file}.made-from`, sources: groundSources, results: [file] }, () =>
     inStep('Drawing the ground of the map', tell =>
-      // in a process of its own: it is minutes of plain computing on a slow machine, and Ctrl-C must be heard
-      runOrFail(process.execPath, [...script, file], {
+      // in a process of its own: it is plain computing for seconds, and Ctrl-C must be heard
+      runOrFail(process.execPath, given, {
         onLine(line) {
           const [share, doing] = line.split('\t')
           if (doing !== undefined) tell(doing, Number(share))

@@ -89,9 +89,9 @@ function findServer(data) {
  * Makes sure that nobody else works on the folder. A server left over by a start that was killed is ended; one whose
  * start still runs is not touched, and the person is told.
  * @param {string} folder
- * @param {string} data
+ * @param {string} [data]
  */
-export async function claimFolder(folder, data) {
+export async function claimFolder(folder, data = join(folder, 'data')) {
   const server = findServer(data)
   if (server === null) return
   const holder = readJson(join(folder, 'running.json'))

@@ -1,8 +1,9 @@
-import { importBuilt } from './build.mjs'
+import { resolve } from 'node:path'
+import { pathToFileURL } from 'node:url'
 
-/** Draws the ground into the file named first, telling share and step a line each. */
-const [outFile = '.data/ground.pmtiles'] = process.argv.slice(2)
-const { buildGround } = await importBuilt('ground')
+/** Draws the ground by the module named second into the file named first, telling share and step, a line each. */
+const [outFile = '.data/ground.pmtiles', script = 'build/server/ground.js'] = process.argv.slice(2)
+const { buildGround } = await import(pathToFileURL(resolve(script)).href)
 await buildGround({
   outFile,
   /** @param {number} share @param {string} doing */

@@ -19,14 +19,15 @@ import { inStep } from './progress.mjs'
  * @property {typeof import('../server').grantApp} grantApp
  * @property {typeof import('../server').isEmpty} isEmpty
  * @property {typeof import('../../drizzle/seed').seed} seed
- * @property {typeof import('../../fakes/mail/server').start} startMail
  */
+
+/** @typedef {{ startMail: typeof import('../../fakes/mail/server').start }} Fakes */
 
 /**
  * Brings up everything the pages need: the database, migrated and for a demo filled, the secret, and the mail server
  * of the demo when none is given. All of it ends with `life`.
  * @param {Installation} installation
- * @param {Parts} parts
+ * @param {Parts & Fakes} parts
  * @param {Life} life
  * @returns {Promise<{ settings: Settings, inboxUrl: string | null }>}
  */
@@ -60,22 +61,31 @@ export function requireSecret(dataDir) {
 
 /**
  * @param {Installation} installation
- * @param {Parts} parts
+ * @param {Fakes} fakes
  * @param {Life} life
  */
-async function startInbox({ port }, parts, life) {
-  const mail = await parts.startMail({ port: await findFreePort(port + 1), smtpPort: 0 })
+async function startInbox({ port }, { startMail }, life) {
+  const mail = await startMail({ port: await findFreePort(port + 1), smtpPort: 0 })
   life.onEnd(() => mail.close())
   return mail
 }
 
 /**
- * Our own MariaDB, brought to the newest tables.
+ * Says that whatever the database of a data folder holds is to be thrown away at the next start.
+ * @param {string} dataDir
+ */
+export function markForReset(dataDir) {
+  mkdirSync(dataDir, { recursive: true, mode: 0o700 })
+  writeFileSync(join(dataDir, 'seeding'), '')
+}
+
+/**
+ * Our own MariaDB, brought to the newest tables, and for a demo filled; gives the address the app uses.
  * @param {Installation} installation
  * @param {Parts} parts
  * @param {Life} life
  */
-async function ownDatabase(installation, parts, life) {
+export async function ownDatabase(installation, parts, life) {
   const database = await inStep('Starting the database', tell =>
     startDatabase({ folder: join(installation.dataDir, 'database'), onStep: tell, onLoss: console.error }),
   )
@@ -87,7 +97,7 @@ async function ownDatabase(installation, parts, life) {
   await parts.grantApp({ ownerUrl, appUser })
   if (installation.demo && (await parts.isEmpty({ databaseUrl: appUrl }))) {
     // a demo that was broken off is thrown away at the next start, and made whole
-    writeFileSync(half, '')
+    markForReset(installation.dataDir)
     await fill(installation, appUrl, parts)
     rmSync(half)
   }
