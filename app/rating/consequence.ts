@@ -15,8 +15,23 @@ export const consequenceWeights: Record<ConsequenceClass, number> = {
 /** Metres the tie-in stands above the feet. */
 const feet = 1
 
+/** What a falling climber may meet, highest first, and what holds when every bolt has failed. */
+export interface Terrain {
+  /** metres of ledges and of the ground at 0 */
+  hard: readonly number[]
+  /** metres of the belay that catches last, on a pitch that starts at a stance; null where nothing does */
+  belay: number | null
+}
+
+/** The terrain of a line: its ledges, and the ground, sea, stance or ledge at its foot unless there is only air. */
+export function toTerrain(line: Pick<RatedLine, 'ledges' | 'below' | 'start'>): Terrain {
+  const ledges = line.ledges.map(({ atM }) => atM).filter(at => at > 0)
+  const hard = line.below === 'air' ? ledges : [...ledges, 0]
+  return { hard: hard.sort((a, b) => b - a), belay: line.start === 'stance' ? 0 : null }
+}
+
 /** One class milder. */
-export function milder(of: ConsequenceClass): ConsequenceClass {
+function milder(of: ConsequenceClass): ConsequenceClass {
   return consequenceClasses[Math.max(0, consequenceClasses.indexOf(of) - 1)]!
 }
 
@@ -26,14 +41,15 @@ function onHard(metres: number): ConsequenceClass {
   return metres >= 1 ? 'low' : 'long'
 }
 
-/** The ledge, or the ground at 0, that feet falling from one height to another meet first; null in free air. */
-function meets(line: RatedLine, fromFeet: number, toFeet: number): number | null {
-  const ledge = line.ledges
-    .map(({ atM }) => atM)
-    .filter(at => at < fromFeet && at > toFeet)
-    .sort((a, b) => b - a)[0]
-  if (ledge !== undefined) return ledge
-  return line.below !== 'air' && toFeet <= 0 ? 0 : null
+/** What feet falling from one height to another meet first, in metres; null in free air. */
+function meets({ hard }: Terrain, fromFeet: number, toFeet: number): number | null {
+  // asked some ten thousand times a rating: an index walks faster than an iterator
+  const from = Math.max(fromFeet, 1e-9)
+  for (let i = 0; i < hard.length; i++) {
+    const at = hard[i]!
+    if (at < from && at >= toFeet) return at
+  }
+  return null
 }
 
 /** Where the tie-in comes to rest when a point at `held` metres catches a fall from `y`; `give` is slack and stretch. */
@@ -41,30 +57,41 @@ function restsAt(held: number, y: number, give: number): number {
   return held - Math.abs(y - held) - give
 }
 
-/** What happens when the point below catches (`caughtAt`), or nothing does (null), after the point at `at` has failed. */
-export function toConsequence(
-  line: RatedLine,
-  fall: { y: number; at: number; caughtAt: number | null; give: number },
-): ConsequenceClass {
-  const { y, at, caughtAt, give } = fall
-  const from = y - feet
-  const rest = caughtAt === null ? Number.NEGATIVE_INFINITY : restsAt(caughtAt, y, give)
-  const hit = meets(line, from, rest - feet)
-  if (hit === null) return toCaught(caughtAt === null ? Number.POSITIVE_INFINITY : 2 * (at - caughtAt))
-  const kept = meets(line, from, restsAt(at, y, give) - feet)
-  const hard = onHard(from - hit)
-  return kept === hit ? milder(hard) : hard
-}
-
+/** A fall that somebody or something catches so many metres further down; further than any catch counts as the ground. */
 function toCaught(further: number): ConsequenceClass {
   if (further < 3) return 'short'
-  return further <= 8 ? 'long' : 'low'
+  if (further <= 8) return 'long'
+  return Number.isFinite(further) ? 'low' : 'ground'
 }
 
-/** What a cut, after which nothing catches, leads to from a tie-in at `y`. */
-export function toUncaught(line: RatedLine, y: number): ConsequenceClass {
-  const hit = meets(line, y - feet, Number.NEGATIVE_INFINITY)
-  return hit === null ? 'low' : onHard(y - feet - hit)
+/**
+ * What follows when the point at `at` fails in a fall from tie-in height `y` and the point at `caughtAt` (null: none)
+ * catches; metres. Counted one class lower where a sound point would not have kept the climber off the ground either.
+ */
+export function toConsequence(
+  terrain: Terrain,
+  fall: { y: number; at: number; caughtAt: number | null; give: number },
+): ConsequenceClass {
+  const { y, at, give } = fall
+  const from = y - feet
+  const caughtAt = fall.caughtAt ?? terrain.belay
+  const rest = caughtAt === null ? Number.NEGATIVE_INFINITY : restsAt(caughtAt, y, give)
+  const hit = meets(terrain, from, rest - feet)
+  if (hit === null) return toCaught(caughtAt === null ? Number.POSITIVE_INFINITY : 2 * (at - caughtAt))
+  const hard = onHard(from - hit)
+  const anyway = meets(terrain, from, restsAt(at, y, give) - feet)
+  return anyway === hit ? milder(hard) : hard
+}
+
+/** What a cut rope, which nothing catches, leads to from a tie-in at `y`; free air below counts as the ground. */
+export function toUncaught(terrain: Terrain, y: number): ConsequenceClass {
+  const hit = meets(terrain, y - feet, Number.NEGATIVE_INFINITY)
+  return hit === null ? 'ground' : onHard(y - feet - hit)
+}
+
+/** What the failure of a lower-off or belay leads to, `height` metres up: the ground from 3 m, by the fall's length below. */
+export function toStationConsequence(terrain: Terrain, height: number): ConsequenceClass {
+  return height > 3 || terrain.hard.at(-1) !== 0 ? 'ground' : onHard(height)
 }
 
 export interface GroundZone {
@@ -81,29 +108,28 @@ const usualGive = (y: number) => 0.6 + 0.08 * y
  * lets it, `anyway` where it does even though the bolt holds. Metres of the tie-in, merged, lowest first.
  */
 export function groundZones(line: RatedLine): GroundZone[] {
-  const step = 0.1
+  const tenths = Math.floor(line.lengthM * 10 + 1e-9)
   const heights = line.points.map(point => point.alongM).sort((a, b) => a - b)
+  const terrain = toTerrain(line)
   const zones: GroundZone[] = []
-  for (let y = step; y <= line.lengthM + 1e-9; y += step) {
+  for (let tenth = 1; tenth <= tenths; tenth++) {
+    const y = tenth / 10
     const below = heights.filter(height => height < y)
-    const kind = toZone(line, y, below.at(-1), below.at(-2))
+    const kind = toZone(terrain, y, below.at(-1), below.at(-2))
     if (kind === null) continue
     const last = zones.at(-1)
-    if (last?.kind === kind && y - last.toM < 1.5 * step) last.toM = round(y)
-    else zones.push({ fromM: round(y - step), toM: round(y), kind })
+    if (last?.kind === kind && last.toM === (tenth - 1) / 10) last.toM = y
+    else zones.push({ fromM: (tenth - 1) / 10, toM: y, kind })
   }
   return zones
 }
 
-const round = (metres: number) => Math.round(metres * 10) / 10
-
-function toZone(line: RatedLine, y: number, held: number | undefined, next: number | undefined) {
-  const lands = (catching: number | undefined) =>
-    meets(
-      line,
-      y - feet,
-      catching === undefined ? Number.NEGATIVE_INFINITY : restsAt(catching, y, usualGive(y)) - feet,
-    )
-  if (lands(held) !== null) return 'anyway' as const
-  return lands(next) !== null ? ('hatched' as const) : null
+function toZone(terrain: Terrain, y: number, held: number | undefined, next: number | undefined) {
+  const lands = (catching: number | undefined) => {
+    const at = catching ?? terrain.belay
+    const rest = at === null ? Number.NEGATIVE_INFINITY : restsAt(at, y, usualGive(y))
+    return meets(terrain, y - feet, rest - feet) !== null
+  }
+  if (lands(held)) return 'anyway' as const
+  return lands(next) ? ('hatched' as const) : null
 }

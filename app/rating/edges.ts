@@ -1,10 +1,12 @@
+import type { PartKind } from '~/crags/part'
 import { type EdgeClass, edgeClasses } from './finding'
 import type { FindingInput, PartInput } from './inputs'
 import { type Lognormal, toMeanCube } from './lognormal'
+import { toDepthShare } from './measure'
 import type { Picker } from './picker'
 
 /** Parts the rope itself runs over. */
-const ropeParts = [
+const ropeParts: readonly PartKind[] = [
   'ring',
   'lower_off_hook',
   'cold_shut',
@@ -24,38 +26,75 @@ const ropeParts = [
 const worse = (a: EdgeClass, b: EdgeClass): EdgeClass =>
   edgeClasses.indexOf(a) >= edgeClasses.indexOf(b) ? a : b
 
-/** The middle of a measure, or null when nobody gave one. */
-export function toMiddle(found: Pick<FindingInput, 'low' | 'high'>): number | null {
-  const { low, high } = found
-  return low === null ? high : high === null ? low : (low + high) / 2
+/** A depth from which a groove is no longer smooth, as a share of the bar. */
+const grooved = 0.15
+
+/** A groove that nobody says a word of the edge of may have a sharp one. */
+const unfelt = { low: 0, central: 0, high: 1 }
+
+function toGrooveEdge(found: FindingInput, part: PartInput, picker: Picker): EdgeClass {
+  const isDeep = found.kind === 'groove' && (toDepthShare(found, part)?.central ?? 0) >= grooved
+  const byDepth = isDeep ? 'rounded' : 'smooth'
+  if (found.edge !== null) return worse(found.edge, byDepth)
+  if (part.findings.some(other => other.kind === 'no_fault')) return byDepth
+  return picker.pickBetween('edge.unfelt', unfelt) > 0 ? 'sharp' : byDepth
 }
 
-/** How deep a groove is as a share of the bar; a bar nobody measured counts as 10 mm. */
-export function toDepthShare(found: FindingInput, part: Pick<PartInput, 'sizeMm'>): number | null {
-  const middle = toMiddle(found)
-  if (middle === null) return null
-  return found.unit === 'percent' ? middle / 100 : middle / (part.sizeMm ?? 10)
-}
+/** Edges at the hanger's end are met only where a draw is turned round: one class blunter than they feel. */
+const blunter = (edge: EdgeClass): EdgeClass => edgeClasses[Math.max(0, edgeClasses.indexOf(edge) - 1)]!
 
-function toFoundEdge(found: FindingInput, part: PartInput): EdgeClass | null {
-  if (found.kind === 'groove' || found.kind === 'section_lost') {
-    if (found.edge !== null) return found.edge
-    return (toDepthShare(found, part) ?? 0) >= 0.15 ? 'rounded' : 'smooth'
+function toFoundEdge(found: FindingInput, part: PartInput, picker: Picker): EdgeClass | null {
+  switch (found.kind) {
+    case 'groove':
+    case 'section_lost':
+      return toGrooveEdge(found, part, picker)
+    case 'sharp_edge_rope':
+    case 'nicked':
+    case 'rope_over_edge':
+      return found.edge ?? 'sharp'
+    case 'sharp_edge_hanger':
+      return part.kind === 'hanger' ? null : blunter(found.edge ?? 'sharp')
+    default:
+      return null
   }
-  if (found.kind === 'sharp_edge_rope') return found.edge ?? 'sharp'
-  if (found.kind === 'nicked') return found.edge ?? 'sharp'
-  if (found.kind === 'rope_over_edge') return found.edge ?? 'sharp'
-  return null
 }
 
 /**
  * The edge class of a part from what people give: smooth without a word of an edge and under 15 % of the bar, rounded
  * from there, else as felt; the worst of several. Null where no rope runs.
  */
-export function chooseEdge(part: PartInput): EdgeClass | null {
-  const found = part.findings.flatMap(finding => toFoundEdge(finding, part) ?? [])
+export function chooseEdge(part: PartInput, picker: Picker): EdgeClass | null {
+  const found = part.findings.flatMap(finding => toFoundEdge(finding, part, picker) ?? [])
   if (found.length > 0) return found.reduce(worse)
   return ropeParts.includes(part.kind) ? 'smooth' : null
+}
+
+/** Parts left hanging at a bolt, which the rope itself runs through. */
+const hangingParts: readonly PartKind[] = [
+  'connector',
+  'fixed_draw',
+  'quick_link',
+  'ring',
+  'sling',
+  'cord',
+  'swivel',
+  'chain',
+  'lower_off_hook',
+  'cold_shut',
+]
+
+/** Whether the rope runs over a part: at a bolt only over what stays hanging there, since climbers bring their own draw. */
+function isRunOver(part: PartInput, atStation: boolean): boolean {
+  const has = (kind: string) => part.findings.some(found => found.kind === kind)
+  if (has('rope_over_edge')) return true
+  if (!atStation) return hangingParts.includes(part.kind)
+  return part.kind === 'hanger' ? has('sharp_edge_rope') : true
+}
+
+/** The sharpest edge that the rope runs over at a bolt or a station, or null. */
+export function findEdge(parts: readonly PartInput[], atStation: boolean, picker: Picker): EdgeClass | null {
+  const edges = parts.flatMap(part => (isRunOver(part, atStation) ? (chooseEdge(part, picker) ?? []) : []))
+  return edges.length === 0 ? null : edges.reduce(worse)
 }
 
 /** The chance that an edge is the class found, or one worse. */

@@ -1,11 +1,13 @@
-import type { ConsequenceClass } from './consequence'
-import { type ClassedLoad, toFallLoads, toHangConsequences } from './falls'
+import { type ConsequenceClass, toStationConsequence, toTerrain } from './consequence'
+import { type ClassedLoad, toFallLoads, toHangShares } from './falls'
 import type { RatingInputs } from './inputs'
 import type { Picker } from './picker'
 import type { Stream } from './yearly'
 
 /** Events of a year that load the point, by what a failure then would lead to. */
 export type YearlyEvents = Record<ConsequenceClass, Stream[]>
+
+const noEvents = (): YearlyEvents => ({ short: [], long: [], low: [], ground: [] })
 
 /** How often in a year each kind of thing happens at the point. */
 export interface Counts {
@@ -14,15 +16,13 @@ export interface Counts {
   falls: number
 }
 
-const noEvents = (): YearlyEvents => ({ short: [], long: [], low: [], ground: [] })
-
 const loadOf = (name: string, picker: Picker) => ({
   median: picker.pick(`load.${name}`),
   zeta: picker.pick(`load.${name}.zeta`),
 })
 
 /** Ascents a year: counted, or by the class of traffic. */
-export function toAscents({ climb }: RatingInputs, picker: Picker): number {
+function toAscents({ climb }: RatingInputs, picker: Picker): number {
   if (climb.ascentsPerYear !== null) return climb.ascentsPerYear * picker.pick('ascents.counted')
   return picker.pick(`ascents.${climb.traffic}`)
 }
@@ -34,89 +34,104 @@ function toFallRow(inputs: RatingInputs): string {
   return ['bolt1', 'bolt2'][inputs.at] ?? 'other'
 }
 
+const stations = ['lower_off', 'abseil_station', 'stance', 'belay_stake']
+
 /** Whether people lower, abseil or belay here rather than lead past it. */
 export function isStation(inputs: RatingInputs): boolean {
-  return ['lower_off', 'abseil_station', 'stance', 'belay_stake'].includes(
-    inputs.climb.points[inputs.at]!.kind,
-  )
+  return stations.includes(inputs.climb.points[inputs.at]!.kind)
 }
 
-/** Handling, hangs and falls a year at the point; at a lower-off a lowering or top-rope fall counts as a hang. */
+/** One kind of event at a station: the row of its count an ascent, and of its load. */
+type StationEvent = readonly [count: string, load: string]
+
+/** What goes on at a station; where nobody said what it is used for, what its kind is for. */
+function listStationEvents(inputs: RatingInputs): StationEvent[] {
+  const { kind } = inputs.climb.points[inputs.at]!
+  const { lowering, toprope, abseil } = inputs.usedFor
+  const isSaid = lowering || toprope || abseil
+  const events: StationEvent[] = []
+  if (kind === 'stance' || kind === 'belay_stake')
+    events.push(['belay.hangs', 'belay_hang'], ['belay.falls', 'belay_fall'], ['static.bolt', 'static'])
+  else events.push(['static.lower_off', 'static'])
+  if (lowering || (!isSaid && kind === 'lower_off')) events.push(['lowerings', 'lowering'])
+  if (toprope || (!isSaid && kind === 'lower_off')) events.push(['toprope_falls', 'toprope'])
+  if (abseil || (!isSaid && kind === 'abseil_station')) events.push(['abseils', 'abseil'])
+  return [...events, ['handling.lower_off', 'handling']]
+}
+
+/** Counts at a station that are neither handling nor a shock. */
+const hangCounts = ['belay.hangs', 'lowerings', 'toprope_falls', 'abseils']
+const shockCounts = ['belay.falls', 'static.bolt', 'static.lower_off']
+
+/** Handling, hangs and falls a year; at a station a lowering, abseil or top-rope fall counts as a hang, a shock as a fall. */
 export function countEvents(inputs: RatingInputs, picker: Picker): Counts {
   const ascents = toAscents(inputs, picker)
+  const sum = (rows: readonly string[]) => ascents * rows.reduce((total, row) => total + picker.pick(row), 0)
   if (!isStation(inputs)) {
     const row = toFallRow(inputs)
-    return {
-      handling: ascents * picker.pick('handling.bolt'),
-      hangs: ascents * picker.pick(`hangs.${row}`),
-      falls: ascents * picker.pick(`falls.${row}`),
-    }
+    return { handling: sum(['handling.bolt']), hangs: sum([`hangs.${row}`]), falls: sum([`falls.${row}`]) }
   }
-  const { lowering, toprope, abseil } = inputs.usedFor
-  const hangs =
-    (lowering ? picker.pick('lowerings') : 0) +
-    (toprope ? picker.pick('toprope_falls') : 0) +
-    (abseil ? picker.pick('abseils') : 0)
+  const rows = listStationEvents(inputs).map(([count]) => count)
   return {
-    handling: ascents * picker.pick('handling.lower_off'),
-    hangs: ascents * hangs,
-    falls: ascents * picker.pick('static.lower_off'),
+    handling: sum(['handling.lower_off']),
+    hangs: sum(rows.filter(row => hangCounts.includes(row))),
+    falls: sum(rows.filter(row => shockCounts.includes(row))),
   }
 }
 
-/** Where a failure of a lower-off or belay at this height ends: the ground from three metres up, low below that. */
-export function toStationShares(inputs: RatingInputs): { consequence: ConsequenceClass; share: number }[] {
-  const height = inputs.climb.points[inputs.at]!.alongM
-  const ground = Math.max(0, (height - 3) / Math.max(height, 1e-9))
-  return [
-    { consequence: 'ground', share: ground },
-    { consequence: 'low', share: 1 - ground },
-  ]
+/** What the failure of this station leads to. */
+export function toStationClass({ climb, at }: RatingInputs): ConsequenceClass {
+  return toStationConsequence(toTerrain(climb), climb.points[at]!.alongM)
 }
 
 function toStationEvents(inputs: RatingInputs, picker: Picker): YearlyEvents {
   const events = noEvents()
   const ascents = toAscents(inputs, picker)
-  const { kind } = inputs.climb.points[inputs.at]!
-  const { lowering, toprope, abseil } = inputs.usedFor
-  const belay = kind === 'stance' || kind === 'belay_stake'
-  const streams: (Stream | null)[] = [
-    lowering ? { rate: picker.pick('lowerings'), load: loadOf('lowering', picker) } : null,
-    toprope ? { rate: picker.pick('toprope_falls'), load: loadOf('toprope', picker) } : null,
-    abseil ? { rate: picker.pick('abseils'), load: loadOf('abseil', picker) } : null,
-    belay ? { rate: picker.pick('belay.hangs'), load: loadOf('belay_hang', picker) } : null,
-    belay ? { rate: picker.pick('belay.falls'), load: loadOf('belay_fall', picker) } : null,
-    { rate: picker.pick('static.lower_off'), load: loadOf('static', picker) },
-  ]
-  for (const stream of streams)
-    if (stream !== null)
-      for (const { consequence, share } of toStationShares(inputs))
-        if (share > 0) events[consequence].push({ load: stream.load, rate: stream.rate * ascents * share })
+  for (const [count, load] of listStationEvents(inputs))
+    events[toStationClass(inputs)].push({ rate: ascents * picker.pick(count), load: loadOf(load, picker) })
   return events
 }
 
-function toBoltEvents(inputs: RatingInputs, picker: Picker): { events: YearlyEvents; falls: ClassedLoad[] } {
+function toBoltEvents(inputs: RatingInputs, falls: readonly ClassedLoad[], picker: Picker): YearlyEvents {
   const events = noEvents()
   const counts = countEvents(inputs, picker)
-  const falls = toFallLoads(inputs, picker)
   for (const { consequence, share, load } of falls)
     events[consequence].push({ load, rate: counts.falls * share })
   const still: Stream[] = [
     { rate: counts.hangs, load: loadOf('lowering', picker) },
     { rate: toAscents(inputs, picker) * picker.pick('static.bolt'), load: loadOf('static', picker) },
   ]
-  for (const { consequence, share } of toHangConsequences(inputs, picker))
-    for (const { rate, load } of still)
-      if (share > 1e-9) events[consequence].push({ load, rate: rate * share })
-  return { events, falls }
+  for (const { consequence, share } of picker.step('hangs', () => toHangShares(inputs, picker)))
+    for (const { rate, load } of still) events[consequence].push({ load, rate: rate * share })
+  return events
 }
 
-/** The year's loads on the point, and of a bolt the falls apart, for drawing. */
-export function toYearlyEvents(
-  inputs: RatingInputs,
-  picker: Picker,
-): { events: YearlyEvents; falls: ClassedLoad[] } {
+/** The falls on a bolt by what they would lead to; none at a station. */
+export function listFalls(inputs: RatingInputs, picker: Picker): ClassedLoad[] {
+  return isStation(inputs) ? [] : picker.step('falls', () => toFallLoads(inputs, picker))
+}
+
+/** The year's loads on the point, by what its failure would lead to. */
+export function toYearlyEvents(inputs: RatingInputs, picker: Picker): YearlyEvents {
   return isStation(inputs)
-    ? { events: toStationEvents(inputs, picker), falls: [] }
-    : toBoltEvents(inputs, picker)
+    ? toStationEvents(inputs, picker)
+    : toBoltEvents(inputs, listFalls(inputs, picker), picker)
+}
+
+/**
+ * The year's loads where nothing is left to hold: it is seen, and only some go on all the same. Nobody hangs on a bolt
+ * that is not there, but falls from above it still come.
+ */
+export function toAvoidedEvents(inputs: RatingInputs, picker: Picker): YearlyEvents {
+  const events = noEvents()
+  const avoided = picker.pick('avoided')
+  if (isStation(inputs)) {
+    for (const [of, streams] of Object.entries(toStationEvents(inputs, picker)))
+      events[of as ConsequenceClass] = streams.map(({ rate, load }) => ({ load, rate: rate * avoided }))
+    return events
+  }
+  const { falls } = countEvents(inputs, picker)
+  for (const { consequence, share, load } of listFalls(inputs, picker))
+    events[consequence].push({ load, rate: falls * avoided * share })
+  return events
 }

@@ -1,158 +1,167 @@
-import { type ConsequenceClass, consequenceClasses, toConsequence, toUncaught } from './consequence'
+import {
+  type ConsequenceClass,
+  consequenceClasses,
+  toConsequence,
+  toTerrain,
+  toUncaught,
+} from './consequence'
+import { listSettings, toFallLoad, toGive } from './draws'
 import type { RatedLine, RatingInputs } from './inputs'
+import { failMixture } from './interference'
 import type { Lognormal } from './lognormal'
 import type { Picker } from './picker'
-import { toEffectiveFactor, toImpactForce, toRopeModulus } from './rope'
+import { toStateStrength } from './strength'
 
-/** The falls (or hangs) on one point that would end in one class if it failed: their share, and their load. */
+/** The falls on one point that would end in one class if it failed: their share, and their load (kN). */
 export interface ClassedLoad {
   consequence: ConsequenceClass
   share: number
   load: Lognormal
 }
 
-/** Three points of Gauss and Hermite for a standard normal. */
-const nodes = [
-  { z: -Math.sqrt(3), weight: 1 / 6 },
-  { z: 0, weight: 2 / 3 },
-  { z: Math.sqrt(3), weight: 1 / 6 },
-] as const
+/** The share of falls in which the point at `at` (null: none) is the one that catches after the rated one failed. */
+interface Catch {
+  at: number | null
+  share: number
+}
+
 const positions = 12
 
-interface Sum {
-  weight: number
-  mean: number
-  square: number
-}
+/** Below this share a fall past all that has failed counts as caught by nothing. */
+const mattering = 1e-15
 
-const emptySums = (): Record<ConsequenceClass, Sum> => ({
-  short: { weight: 0, mean: 0, square: 0 },
-  long: { weight: 0, mean: 0, square: 0 },
-  low: { weight: 0, mean: 0, square: 0 },
-  ground: { weight: 0, mean: 0, square: 0 },
-})
-
-/** Adds the moments of ln load of one way to fall to its class. */
-function note(sum: Sum, weight: number, load: number): void {
-  const log = Math.log(load)
-  sum.weight += weight
-  sum.mean += weight * log
-  sum.square += weight * log * log
-}
-
-/** The lognormal of each class with the mean and variance of ln load; `extra` is variance not drawn. */
-function toClasses(sums: Record<ConsequenceClass, Sum>, extra: number): ClassedLoad[] {
-  return consequenceClasses.flatMap(consequence => {
-    const { weight, mean, square } = sums[consequence]
-    if (weight <= 1e-12) return []
-    const average = mean / weight
-    const variance = Math.max(1e-4, square / weight - average * average) + extra
-    return [{ consequence, share: weight, load: { median: Math.exp(average), zeta: Math.sqrt(variance) } }]
-  })
-}
-
-/** Which points below may catch after the one at `index` has failed, with the chance that each does. */
-export function listCatches(
-  line: RatedLine,
-  index: number,
-  picker: Picker,
-): { at: number | null; chance: number }[] {
-  const catches: { at: number | null; chance: number }[] = []
+/** Which points below catch after the one at `index` has failed, each with its own condition. Shares add up to 1. */
+function listCatches(line: RatedLine, index: number, picker: Picker): Catch[] {
+  // what the next point feels is like a fall straight onto a belay: harder, on less rope
+  const load = { median: picker.pick('load.belay_fall'), zeta: picker.pick('load.belay_fall.zeta') }
+  const catches: Catch[] = []
   let left = 1
-  for (let i = index - 1; i >= 0 && left > 1e-9; i--) {
+  for (let i = index - 1; i >= 0 && left > mattering; i--) {
     const point = line.points[i]!
-    const fails = picker.pick(`next.fails.${point.state}`)
-    catches.push({ at: point.alongM, chance: left * (1 - fails) })
+    const fails = failMixture(load, toStateStrength(point.kind, point.state, picker))
+    catches.push({ at: point.alongM, share: left * (1 - fails) })
     left *= fails
   }
-  return [...catches, { at: null, chance: left }]
+  return [...catches, { at: null, share: left }]
 }
+
+/** Where the tie-in may be when a climber falls onto a point: evenly from it up to the next, or the end of the pitch. */
+function listPositions(line: RatedLine, index: number): number[] {
+  const held = line.points[index]!.alongM
+  const next = line.points[index + 1]?.alongM ?? Math.max(line.lengthM, held + 1)
+  return Array.from({ length: positions }, (_, i) => held + ((i + 0.5) / positions) * (next - held))
+}
+
+const order: Record<ConsequenceClass, number> = { short: 0, long: 1, low: 2, ground: 3 }
+
+/** Gathers weights and moments of ln load by class: each class keeps the lognormal of the same mean and variance. */
+class Sums {
+  private readonly moments = new Float64Array(3 * consequenceClasses.length)
+
+  add(of: ConsequenceClass, weight: number, logLoad: number): void {
+    const i = 3 * order[of]
+    this.moments[i]! += weight
+    this.moments[i + 1]! += weight * logLoad
+    this.moments[i + 2]! += weight * logLoad * logLoad
+  }
+
+  addAll(other: Sums, share: number): void {
+    for (let i = 0; i < this.moments.length; i++) this.moments[i]! += share * other.moments[i]!
+  }
+
+  toLoads(): ClassedLoad[] {
+    return consequenceClasses.flatMap(consequence => {
+      const i = 3 * order[consequence]
+      const share = this.moments[i]!
+      if (share <= 0) return []
+      const mean = this.moments[i + 1]! / share
+      // a single way to fall still spreads a little
+      const variance = Math.max(1e-4, this.moments[i + 2]! / share - mean * mean)
+      return [{ consequence, share, load: { median: Math.exp(mean), zeta: Math.sqrt(variance) } }]
+    })
+  }
+}
+
+/** Falls onto the rated point, one entry for each position and setting; weights add up to 1. */
+interface Drawn {
+  y: Float64Array
+  logLoad: Float64Array
+  give: Float64Array
+  weight: Float64Array
+}
+
+function drawFalls({ climb, at }: RatingInputs, picker: Picker): Drawn {
+  const held = climb.points[at]!.alongM
+  const settings = listSettings(picker)
+  const empty = () => new Float64Array(positions * settings.length)
+  const drawn: Drawn = { y: empty(), logLoad: empty(), give: empty(), weight: empty() }
+  let i = 0
+  for (const y of listPositions(climb, at))
+    for (const setting of settings) {
+      const load = toFallLoad(held, y, setting)
+      drawn.y[i] = y
+      drawn.logLoad[i] = Math.log(load)
+      drawn.give[i] = toGive(held, y, load, setting)
+      drawn.weight[i++] = setting.weight / positions
+    }
+  return drawn
+}
+
+/** Moments of the falls by class, with what follows each as told. */
+function classify(
+  { y, logLoad, give, weight }: Drawn,
+  follow: (y: number, give: number) => ConsequenceClass,
+): Sums {
+  const sums = new Sums()
+  for (let i = 0; i < y.length; i++) sums.add(follow(y[i]!, give[i]!), weight[i]!, logLoad[i]!)
+  return sums
+}
+
+const draw = (inputs: RatingInputs, picker: Picker) => picker.step('draws', () => drawFalls(inputs, picker))
 
 /**
  * Falls on a bolt from the climb's geometry: the tie-in anywhere between it and the next point, rope, slack, mass, body
- * and belay as they vary; by what they would lead to if it failed. Loads in kN, shares adding up to 1.
+ * and belay as they vary; by what they would lead to if the bolt failed. Shares adding up to 1.
  */
 export function toFallLoads(inputs: RatingInputs, picker: Picker): ClassedLoad[] {
-  const { climb, at } = inputs
-  const held = climb.points[at]!.alongM
-  const next = climb.points[at + 1]?.alongM ?? Math.max(climb.lengthM, held + 1)
-  const catches = listCatches(climb, at, picker)
-  const sums = emptySums()
-  const draw = toDraw(picker)
-  for (let i = 0; i < positions; i++) {
-    const y = held + ((i + 0.5) / positions) * (next - held)
-    for (const { load, give, weight } of draw(held, y))
-      for (const { at: caughtAt, chance } of catches)
-        note(sums[toConsequence(climb, { y, at: held, caughtAt, give })], (weight * chance) / positions, load)
-  }
-  return toClasses(sums, 0)
+  const terrain = toTerrain(inputs.climb)
+  const at = inputs.climb.points[inputs.at]!.alongM
+  const all = new Sums()
+  for (const { at: caughtAt, share } of listCatches(inputs.climb, inputs.at, picker))
+    all.addAll(
+      picker.step(`falls caught at ${caughtAt}`, () =>
+        classify(draw(inputs, picker), (y, give) => toConsequence(terrain, { y, at, caughtAt, give })),
+      ),
+      share,
+    )
+  return all.toLoads()
 }
 
-/** Loads of falls that would end in each class if the rope were cut: nothing catches. */
+/** The same falls by what they would lead to if the rope were cut: nothing catches. */
 export function toUncaughtLoads(inputs: RatingInputs, picker: Picker): ClassedLoad[] {
-  const { climb, at } = inputs
-  const held = climb.points[at]!.alongM
-  const next = climb.points[at + 1]?.alongM ?? Math.max(climb.lengthM, held + 1)
-  const sums = emptySums()
-  const draw = toDraw(picker)
-  for (let i = 0; i < positions; i++) {
-    const y = held + ((i + 0.5) / positions) * (next - held)
-    for (const { load, weight } of draw(held, y)) note(sums[toUncaught(climb, y)], weight / positions, load)
-  }
-  return toClasses(sums, 0)
+  const terrain = toTerrain(inputs.climb)
+  return classify(draw(inputs, picker), y => toUncaught(terrain, y)).toLoads()
 }
 
-/** All ways a fall from `y` onto a point at `held` may load it (kN), with slack and stretch, weights adding up to 1. */
-function toDraw(
-  picker: Picker,
-): (held: number, y: number) => { load: number; give: number; weight: number }[] {
-  const r = picker.pick('r')
-  const spread = (name: string) =>
-    nodes.map(({ z, weight }) => ({ factor: Math.exp(z * picker.pick(`${name}.zeta`)), weight }))
-  const [masses, slacks, bodies, brakes] = [spread('mass'), spread('slack'), spread('body'), spread('brake')]
-  const modulus = toRopeModulus(picker.pick('rope.force') * 1000)
-  const mass = picker.pick('mass')
-  const slack = picker.pick('slack')
-  const body = picker.pick('body')
-  const slips = [picker.pick('brake.soft'), picker.pick('brake.firm')].map(
-    kn => kn * picker.pick('brake') * (1 + 1 / r),
-  )
-  const spent: { massKg: number; slackM: number; bodyFactor: number; cap: number; weight: number }[] = []
-  for (const m of masses)
-    for (const s of slacks)
-      for (const b of bodies)
-        for (const t of brakes)
-          for (const slip of slips)
-            spent.push({
-              massKg: mass * m.factor,
-              slackM: slack * s.factor,
-              bodyFactor: body * b.factor,
-              cap: slip * t.factor,
-              weight: (m.weight * s.weight * b.weight * t.weight) / 2,
-            })
-  return (held, y) =>
-    spent.map(({ massKg, slackM, bodyFactor, cap, weight }) => {
-      const climberSide = Math.abs(y - held)
-      const height = 2 * Math.max(0, y - held) + slackM
-      const factor = toEffectiveFactor({ height, climberSide, belayerSide: held, slack: slackM, r })
-      const tension = toImpactForce({ massKg, factor, modulus }) / 1000
-      const load = Math.min(bodyFactor * (1 + r) * tension, cap)
-      // the rope stretches by what it really carries, on the climber's side and less on the belayer's
-      const stretch = ((load / (1 + r)) * 1000 * (climberSide + r * held + slackM)) / modulus
-      return { load, give: slackM + stretch, weight }
-    })
-}
+/** Metres the tie-in hangs below the point. */
+const hanging = 0.3
 
-/** What a failure would lead to while somebody hangs on the point, the tie-in just below it; chances adding up to 1. */
-export function toHangConsequences(
+/** What a failure leads to while somebody hangs on the point; shares adding up to 1. */
+export function toHangShares(
   inputs: RatingInputs,
   picker: Picker,
 ): { consequence: ConsequenceClass; share: number }[] {
-  const { climb, at } = inputs
-  const held = climb.points[at]!.alongM
-  const y = held - 0.3
-  return listCatches(climb, at, picker).map(({ at: caughtAt, chance }) => ({
-    consequence: toConsequence(climb, { y, at: held, caughtAt, give: picker.pick('slack') + 0.3 }),
-    share: chance,
+  const { climb, at: index } = inputs
+  const terrain = toTerrain(climb)
+  const at = climb.points[index]!.alongM
+  const fall = { y: at - hanging, at, give: picker.pick('slack') + hanging }
+  return listCatches(climb, index, picker).map(({ at: caughtAt, share }) => ({
+    consequence: toConsequence(terrain, { ...fall, caughtAt }),
+    share,
   }))
+}
+
+/** What a rope cut while somebody hangs on the point leads to. */
+export function toUncaughtHang({ climb, at }: RatingInputs): ConsequenceClass {
+  return toUncaught(toTerrain(climb), climb.points[at]!.alongM - hanging)
 }

@@ -5,7 +5,7 @@ import type { Material, PartKind, Side } from '~/crags/part'
 import type { EdgeClass, FindingKind } from './finding'
 
 /** One fixed point of the line, lowest first. */
-export interface LinePoint {
+interface LinePoint {
   kind: AnchorKind
   alongM: number
   assumed: boolean

@@ -14,13 +14,6 @@ export function toLognormalCdf({ median, zeta }: Lognormal, x: number): number {
   return x <= 0 ? 0 : toNormalCdf(Math.log(x / median) / zeta)
 }
 
-/** P(X ≤ x) of a mixture. */
-export function toMixtureCdf(mixture: Mixture, x: number): number {
-  let sum = 0
-  for (const part of mixture) if (part.weight > 0) sum += part.weight * toLognormalCdf(part, x)
-  return sum
-}
-
 /** The mean of X to the third power: m³ exp(9ζ²/2). */
 export function toMeanCube({ median, zeta }: Lognormal): number {
   return median ** 3 * Math.exp(4.5 * zeta * zeta)

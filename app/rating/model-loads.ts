@@ -64,9 +64,4 @@ export const eventRows: readonly ModelRow[] = [
   fixed('belay.hangs', 1.2, { unit: 'an ascent' }),
   fixed('belay.falls', 0.0005, { unit: 'an ascent' }),
   row('avoided', 0.005, 0.02, 0.1, { unit: 'factor on the rate of a fault that is seen' }),
-  fixed('next.fails.good', 1e-5),
-  fixed('next.fails.fair', 1e-4),
-  fixed('next.fails.unknown', 1e-3),
-  fixed('next.fails.poor', 0.01),
-  fixed('next.fails.severe', 0.2),
 ]

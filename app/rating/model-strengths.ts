@@ -1,5 +1,5 @@
 import type { ModelRow } from './model'
-import { around, fixed } from './model-row'
+import { around, fixed, row } from './model-row'
 
 const published = { mark: 'std', source: 'published proportion of failures' }
 
@@ -29,8 +29,8 @@ export const strengthRows: readonly ModelRow[] = [
     fixed(`strength.${name}.bad`, bad, { unit: 'kN' }),
     fixed(`strength.${name}.bad.zeta`, badZeta),
   ]),
-  around('strength.factor', 1, 1 / 1.15, 1 / 0.85, { unit: 'divides sound and weak' }),
-  around('strength.bad.factor', 1, 1 / 1.3, 1 / 0.7, { unit: 'divides bad' }),
+  row('strength.factor', 0.85, 1, 1.15, { unit: 'factor on sound and weak' }),
+  row('strength.bad.factor', 0.7, 1, 1.3, { unit: 'factor on bad' }),
   fixed('cap.gate_open', 7.5, { unit: 'kN', source: 'EN 12275: at least 7', mark: 'prac' }),
   fixed('cap.cross_loaded', 7.8, { unit: 'kN', source: 'EN 12275: at least 7', mark: 'prac' }),
   fixed('cap.nose_hooked', 2, { unit: 'kN', mark: 'prac', source: 'common practice' }),

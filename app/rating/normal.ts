@@ -25,8 +25,3 @@ export function toNormalCdf(z: number): number {
       : bell / (x + 1 / (x + 2 / (x + 3 / (x + 4 / (x + 0.65))))) / rootTwoPi
   return z > 0 ? 1 - tail : tail
 }
-
-/** The standard normal density. */
-export function toNormalDensity(z: number): number {
-  return Math.exp((-z * z) / 2) / Math.sqrt(2 * Math.PI)
-}

@@ -1,15 +1,21 @@
 import type { PartKind } from '~/crags/part'
 import { type Band, bandOf, moreUrgent } from './band'
 import { type ConsequenceClass, consequenceClasses, consequenceWeights } from './consequence'
-import { type Evaluation, evaluate, toRate, type Way, ways } from './evaluate'
+import { toDrawnLoad, toDrawnStrength } from './drawing'
+import { type Evaluation, evaluate, toBreakRate, toByClass, toRate } from './evaluate'
 import { listFloors } from './floors'
-import type { RatingInputs } from './inputs'
+import type { FindingInput, PartInput, RatingInputs } from './inputs'
 import type { RatingModel } from './model'
-import { createPicker } from './picker'
+import { createPicker, type Picker } from './picker'
+import { inRock } from './weights'
 import { toReason } from './words'
 
 /** Changes whenever the same inputs and model may give another result. */
-export const engineVersion = '1.0'
+export const engineVersion = '1.1'
+
+/** The ways a point lets a climber fall. */
+const ways = ['pulls_out', 'breaks', 'cuts_rope', 'releases_rope'] as const
+type Way = (typeof ways)[number]
 
 /** How urgent a fixed point with its findings is on one climb, how sure, and why. */
 export interface Rating {
@@ -21,7 +27,7 @@ export interface Rating {
   rate: number
   rateLow: number
   rateHigh: number
-  /** R of the same point in ordinary service (only minor faults); `times` is danger against that */
+  /** R of a usual one of its kind in the same place, sound and known good; `times` is danger against that */
   usual: number
   times: number
   timesLow: number
@@ -45,31 +51,54 @@ interface Moved {
 }
 
 /** R with each ranged number in turn at its two ends, all others central. */
-function moveEach(inputs: RatingInputs, model: RatingModel, names: string[]): Moved[] {
-  const at = (name: string, end: 'low' | 'high') => evaluate(inputs, createPicker(model, { name, end })).rate
-  return names.map(name => {
-    const ends = [at(name, 'low'), at(name, 'high')]
+function moveEach(inputs: RatingInputs, picker: Picker): Moved[] {
+  return picker.ranged().map(name => {
+    const ends = [picker.hold(name, 'low'), picker.hold(name, 'high')].map(
+      held => evaluate(inputs, held).rate,
+    )
     return { name, low: Math.min(...ends), high: Math.max(...ends) }
   })
 }
 
-/** A usual one of its kind: the same place with the same kinds of part, in ordinary service, nothing found on them. */
+const usualKind: Partial<Record<PartKind, PartKind>> = { self_drilled: 'wedge_bolt', drive_in: 'wedge_bolt' }
+const seenGood: FindingInput = {
+  kind: 'no_fault',
+  low: null,
+  high: null,
+  unit: null,
+  edge: null,
+  triedByHand: null,
+}
+
+/** A usual one of its kind: the same place, with the same kinds of part, of metal that does not crack, found sound. */
 function toUsual(inputs: RatingInputs): RatingInputs {
-  const parts = inputs.parts.map(part => ({ ...part, kind: usualKind[part.kind] ?? part.kind, findings: [] }))
+  const parts: PartInput[] = inputs.parts.map(part => ({
+    ...part,
+    kind: usualKind[part.kind] ?? part.kind,
+    findings: [seenGood],
+  }))
   const otherSide = inputs.otherSide === null ? null : ('looked_at' as const)
   return { ...inputs, parts, otherSide, place: { ...inputs.place, warmSea: false } }
 }
 
-const usualKind: Partial<Record<PartKind, PartKind>> = { self_drilled: 'wedge_bolt', drive_in: 'wedge_bolt' }
-
-const byClassOf = ({ byWay }: Evaluation) =>
-  Object.fromEntries(
-    consequenceClasses.map(of => [of, ways.reduce((sum, way) => sum + byWay[way][of], 0)]),
-  ) as Record<ConsequenceClass, number>
-
 /** The largest by a measure. */
 function most<T>(items: readonly T[], measure: (item: T) => number): T {
   return items.reduce((best, next) => (measure(next) > measure(best) ? next : best))
+}
+
+/** The way that carries most of R; of load against strength, whether what sits in the rock or what hangs on it. */
+function toDeciding(inputs: RatingInputs, { breaks, cuts, releases }: Evaluation, picker: Picker): Way {
+  const isInRock = (part: PartInput) => inRock.includes(part.kind)
+  const pullsOut = toBreakRate(inputs, picker, isInRock)
+  const hanging = toBreakRate(inputs, picker, part => !isInRock(part))
+  const share = pullsOut + hanging === 0 ? 0 : pullsOut / (pullsOut + hanging)
+  const rates: Record<Way, number> = {
+    pulls_out: toRate(breaks) * share,
+    breaks: toRate(breaks) * (1 - share),
+    cuts_rope: toRate(cuts),
+    releases_rope: toRate(releases),
+  }
+  return most(ways, way => rates[way])
 }
 
 /** Numbers that say the same in words are one reason: the strongest of them. */
@@ -81,25 +110,29 @@ function toReasons(moved: Moved[], inputs: RatingInputs) {
     const { words, look } = toReason(name, kind)
     if (!said.has(words)) said.set(words, { name, words, times: high / low, look })
   }
-  return [...said.values()]
+  return [...said.values()].filter(({ times }) => times > 1.005)
 }
 
 const atLeast = (band: Band, floors: string[]) => (floors.length > 0 ? moreUrgent(band, 'turn') : band)
+
+/** Danger against a usual one; 1 where neither can happen. */
+const timesOf = (rate: number, usual: number) => (usual > 0 ? rate / usual : rate > 0 ? 1e9 : 1)
 
 /**
  * The urgency of a fixed point: R with every number central; low and high as the lowest and highest R with one number
  * at an end of its range; bands, floors, reasons and the next best look. Never throws for scant inputs.
  */
 export function rate(inputs: RatingInputs, model: RatingModel): Rating {
-  const picker = createPicker(model, null)
+  const picker = createPicker(model)
   const central = evaluate(inputs, picker)
-  const moved = moveEach(inputs, model, picker.ranged()).filter(({ low }) => low > 0)
+  const moved = moveEach(inputs, picker).filter(({ low }) => low > 0)
   const rateLow = Math.min(central.rate, ...moved.map(({ low }) => low))
   const rateHigh = Math.max(central.rate, ...moved.map(({ high }) => high))
-  const usual = evaluate(toUsual(inputs), createPicker(model, null), 'fair').rate
+  const usual = evaluate(toUsual(inputs), createPicker(model)).rate
   const floors = listFloors(inputs)
-  const byClass = byClassOf(central)
+  const byClass = toByClass(central)
   const reasons = toReasons(moved, inputs)
+  const load = toDrawnLoad(inputs, picker)
   return {
     band: atLeast(bandOf(central.rate), floors),
     bandLow: atLeast(bandOf(rateLow), floors),
@@ -108,16 +141,20 @@ export function rate(inputs: RatingInputs, model: RatingModel): Rating {
     rateLow,
     rateHigh,
     usual,
-    times: central.rate / usual,
-    timesLow: rateLow / usual,
-    timesHigh: rateHigh / usual,
+    times: timesOf(central.rate, usual),
+    timesLow: timesOf(rateLow, usual),
+    timesHigh: timesOf(rateHigh, usual),
     worst: most(consequenceClasses, of => consequenceWeights[of] * byClass[of]),
     byClass,
-    deciding: most(ways, way => toRate(central.byWay[way])),
+    deciding: toDeciding(inputs, central, picker),
     reasons: reasons.slice(0, 3).map(({ name, words, times }) => ({ name, words, times })),
     lookNext: reasons.find(({ look }) => look !== undefined)?.look ?? null,
     floors,
-    load: central.load && { medianKn: central.load.median, zeta: central.load.zeta },
-    strength: central.strength.map(({ weight, median, zeta }) => ({ weight, medianKn: median, zeta })),
+    load: load && { medianKn: load.median, zeta: load.zeta },
+    strength: toDrawnStrength(inputs, picker).map(({ weight, median, zeta }) => ({
+      weight,
+      medianKn: median,
+      zeta,
+    })),
   }
 }

@@ -1,5 +1,5 @@
 /** Standard gravity as the calculations use it, m/s². */
-export const gravity = 9.81
+const gravity = 9.81
 const standardMass = 80
 const standardFactor = 1.77
 

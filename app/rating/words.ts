@@ -92,13 +92,22 @@ export function toReason(name: string, kind: AnchorKind): Said {
       }
     case 'edge':
       return {
-        words: 'Whether the edge is sharper than it feels',
+        words:
+          of === 'unfelt'
+            ? 'How sharp the edge is, which nobody has felt'
+            : 'Whether the edge is sharper than it feels',
         look: 'run a fingernail over the edge, and photograph it close',
       }
-    case 'section left':
+    case 'measure':
+    case 'section':
       return {
-        words: 'How much of the bar is left at the groove',
+        words: of === 'section' ? 'How much of the section is lost' : 'How deep the groove is',
         look: 'measure the thinnest place with the wear gauge',
+      }
+    case 'material':
+      return {
+        words: 'Whether it is of a stainless steel that may crack by a warm sea',
+        look: 'find out what steel it is; no look or pull shows the cracks',
       }
     case 'release':
       return { words: 'How easily it lets the rope out' }

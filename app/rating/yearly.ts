@@ -1,43 +1,37 @@
 import type { Lognormal } from './lognormal'
-import { toNormalCdf } from './normal'
+import { gridStep, loadGrid, tableOf } from './tables'
 
-/** A stream of events in a year: how many, and the load of each. */
+/** A stream of events in a year: how many, and the load of each (kN). */
 export interface Stream {
   rate: number
   load: Lognormal
 }
 
-const step = 0.05
-const from = Math.log(0.01)
-/** Loads at which strengths are asked: 0.01 to 600 kN, even in the logarithm. */
-export const loadGrid: Float64Array = Float64Array.from({ length: 221 }, (_, i) => Math.exp(from + step * i))
-
-/** A chance of failure under load, asked once for every load of the grid. */
-export function onGrid(failing: (x: number) => number): Float64Array {
-  return Float64Array.from(loadGrid, failing)
+/**
+ * The distribution of the year's largest load over the grid, as weights to multiply chances of failure by: with
+ * G(x) = exp(−Σ νᵢ(1 − Fᵢ(x))), weight = Σ νᵢ fᵢ(x) G(x) dx. Extreme-value theory of a Poisson stream.
+ */
+export function toYearlyLargest(streams: readonly Stream[]): Float64Array {
+  const weights = new Float64Array(loadGrid.length)
+  const tables = streams.map(({ rate, load }) => ({ rate, table: tableOf(load) }))
+  for (let i = 0; i < weights.length; i++) {
+    let exceed = 0
+    let density = 0
+    for (const { rate, table } of tables) {
+      exceed += rate * table.above[i]!
+      density += rate * table.density[i]!
+    }
+    weights[i] = density === 0 ? 0 : density * Math.exp(-exceed) * gridStep
+  }
+  return weights
 }
 
 /**
- * The chance of at least one failure in a year when a part of fixed strength meets loads again and again: with G(x) =
- * exp(−Σ νᵢ(1 − Fᵢ(x))) the distribution of the year's largest load, ∫ g(x) F(x) dx. Drawing the strength anew at each
- * event instead would be up to a hundred times too high. Extreme-value theory of a Poisson stream.
+ * The chance of at least one failure in a year, ∫ g(x) F(x) dx. A part's strength is fixed while loads repeat: rate × P
+ * would draw the strength anew at each event and be up to a hundred times too high.
  */
-export function failInYear(streams: readonly Stream[], failing: Float64Array): number {
+export function failInYear(largest: Float64Array, failing: Float64Array): number {
   let sum = 0
-  for (let i = 0; i < failing.length; i++) {
-    const u = from + step * i
-    let exceed = 0
-    let density = 0
-    for (const { rate, load } of streams) {
-      const z = (u - Math.log(load.median)) / load.zeta
-      if (z < -9 && rate > 0) {
-        exceed += rate
-        continue
-      }
-      exceed += rate * toNormalCdf(-z)
-      density += (rate * Math.exp((-z * z) / 2)) / load.zeta
-    }
-    sum += density * Math.exp(-exceed) * failing[i]!
-  }
-  return (sum * step) / Math.sqrt(2 * Math.PI)
+  for (let i = 0; i < largest.length; i++) sum += largest[i]! * failing[i]!
+  return sum
 }

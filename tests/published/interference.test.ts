@@ -10,7 +10,8 @@ import {
 } from '~/rating/interference'
 import { toLognormalCdf } from '~/rating/lognormal'
 import { failStation } from '~/rating/station'
-import { failInYear, onGrid } from '~/rating/yearly'
+import { toMixtureTable } from '~/rating/tables'
+import { failInYear, toYearlyLargest } from '~/rating/yearly'
 
 const relative = (got: number, want: number) => Math.abs(got / want - 1)
 
@@ -73,12 +74,18 @@ describe('Interference of load and strength', () => {
       { median: 6, zeta: 0.5 },
       { median: 8, zeta: 0.4 },
     ]
-    const at = (side: typeof a) => (x: number) => toLognormalCdf(side, x)
+    const at = (side: typeof a, x: number) => ({
+      half: toLognormalCdf(side, x / 2),
+      shocked: toLognormalCdf(side, 1.3 * x),
+      whole: toLognormalCdf(side, x),
+    })
     const reach = [a, b].flatMap(side => [0.5, 1, 1.3].map(factor => ({ ...side, factor })))
-    const all = interfere(load, reach, failStation(at(a), at(b), { k: 1.3, c: 0.1 }))
+    const all = interfere(load, reach, x => failStation(at(a, x), at(b, x), 0.1))
     expect(relative(all, 5.02551708e-4)).toBeLessThan(1e-7)
-    const apart = interfere(load, reach, failStation(at(a), at(b), { k: 1.3, c: 0 }))
+    const apart = interfere(load, reach, x => failStation(at(a, x), at(b, x), 0))
     expect(relative(apart, 3.47544e-7)).toBeLessThan(1e-5)
+    const common = interfere(load, reach, x => failStation(at(a, x), at(b, x), 1))
+    expect(relative(common, 5.022389184e-3)).toBeLessThan(1e-7)
   })
 
   // extreme-value theory of a Poisson stream, computed by Simpson's rule
@@ -88,8 +95,8 @@ describe('Interference of load and strength', () => {
     [10, 0.0102284487],
     [100, 0.0671239408],
   ])('gives the chance of failing under the largest of %d loads in a year', (rate, want) => {
-    const strength = onGrid(x => toLognormalCdf({ median: 12, zeta: 0.2 }, x))
-    const got = failInYear([{ rate, load: { median: 4.3, zeta: 0.27 } }], strength)
+    const strength = toMixtureTable([{ weight: 1, median: 12, zeta: 0.2 }])
+    const got = failInYear(toYearlyLargest([{ rate, load: { median: 4.3, zeta: 0.27 } }]), strength)
     expect(relative(got, want)).toBeLessThan(1e-6)
   })
 })

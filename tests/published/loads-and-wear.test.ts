@@ -1,5 +1,6 @@
 import { describe, expect, it } from 'vitest'
-import { corrosionExponents, toChainStrength, toUniformLoss } from '~/rating/corrosion'
+import { toChainStrength } from '~/rating/chain'
+import { corrosionExponents, toUniformLoss } from '~/rating/corrosion'
 import { anchorMinimum, connectorMinimum } from '~/rating/minimum-strength'
 import { modelRows } from '~/rating/model'
 import { toEffectiveFactor, toImpactForce, toRopeModulus } from '~/rating/rope'

@@ -6,7 +6,7 @@ import type { FindingInput, PartInput, RatingInputs } from '~/rating/inputs'
 import { modelRows, toModel } from '~/rating/model'
 import { rate } from '~/rating/rate'
 
-export const model = toModel(modelRows)
+const model = toModel(modelRows)
 
 /** A finding as people give it: mostly without a measure. */
 export function found(kind: FindingKind, given: Partial<FindingInput> = {}): FindingInput {

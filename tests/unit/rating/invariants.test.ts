@@ -77,7 +77,7 @@ describe('A worn ring', () => {
   })
 
   it('is never less urgent when the edge is sharper', () => {
-    const rates = edgeClasses.map(edge => ring(3, edge))
+    const rates = edgeClasses.map(edge => ring(1, edge))
     for (let i = 1; i < rates.length; i++) expect(rates[i]).toBeGreaterThan(rates[i - 1]!)
   })
 })
