@@ -2,6 +2,8 @@ import type { Config } from '@react-router/dev/config'
 
 export default {
   ssr: true,
+  // a pattern, since the server build has further entries (vite.config.ts)
+  serverBuildFile: '[name].js',
   future: {
     v8_middleware: true,
     v8_splitRouteModules: true,

@@ -20,7 +20,7 @@ export default defineConfig({
   environments: {
     ssr: {
       build: {
-        rollupOptions: { input: serverInputs, output: { entryFileNames: '[name].js' } },
+        rollupOptions: { input: serverInputs },
       },
     },
   },

@@ -139,7 +139,10 @@ function OrderCell({ row }: { row: DangerRow }) {
     )
   if (row.order === null)
     return (
-      <Link to={`/orders/new?hazard=${row.code}`} className="font-medium text-verdigris no-underline hover:underline">
+      <Link
+        to={`/orders/new?hazard=${row.code}`}
+        className="font-medium text-verdigris no-underline hover:underline"
+      >
         Make order
       </Link>
     )
