@@ -166,5 +166,3 @@ async function withLine<Row extends { id: string; pitchId: string }>(db: Queryab
     .orderBy(asc(ledges.atM))
   return { ...row, points: placed.get(row.id)!, ledges: onIt }
 }
-
-export type ClimbWithLine = NonNullable<Awaited<ReturnType<typeof findClimb>>>

@@ -10,6 +10,7 @@ import { writeActivity } from '~/record/activities.server'
 import { moveHazard } from '~/reports/hazards.server'
 import { refreshAnchors } from '~/reports/refresh.server'
 import { toStillTrueMail } from './mails'
+import { noticeMoves } from './notice'
 import { listAccessOfficers } from './officers.server'
 
 /** The notices in force in name on some hazards of which none is open, warned or waiting for a check any more. */
@@ -59,11 +60,14 @@ export async function endFirstWarnings(
   }
 }
 
+/** States a notice can be withdrawn from, by the table of moves. */
+const withdrawable = noticeMoves.filter(move => move.to === 'withdrawn').map(move => move.from)
+
 async function withdraw(tx: Transaction, act: Act, noticeId: string, cragId: string): Promise<void> {
   const [done] = await tx
     .update(notices)
     .set({ state: 'withdrawn', withdrawnAt: act.now, withdrawnBy: act.by.personId, updatedAt: act.now })
-    .where(and(eq(notices.id, noticeId), eq(notices.state, 'published')))
+    .where(and(eq(notices.id, noticeId), inArray(notices.state, withdrawable)))
   if (done.affectedRows === 0) throw new Refusal('This notice has been withdrawn already.')
   await writeActivity(tx, act, {
     verb: 'withdrawn',

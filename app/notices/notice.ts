@@ -12,7 +12,13 @@ export const noticeKinds = [
 export type NoticeKind = (typeof noticeKinds)[number]
 
 /** Kinds an access officer writes; a first warning has words of its own. */
-export const writtenKinds = ['hazard', 'works', 'please_do_not_climb', 'owner_forbids', 'closed_in_law'] as const
+export const writtenKinds = [
+  'hazard',
+  'works',
+  'please_do_not_climb',
+  'owner_forbids',
+  'closed_in_law',
+] as const
 
 export const noticeKindWords: Record<NoticeKind, string> = {
   first_warning: 'First warning',

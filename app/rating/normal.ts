@@ -6,9 +6,16 @@ const lower = [
   0.0883883476483184, 1.75566716318264, 16.064177579207, 86.7807322029461, 296.564248779674, 637.333633378831,
   793.826512519948, 440.413735824752,
 ]
-const rootTwoPi = 2.506628274631
+const rootTwoPi = Math.sqrt(2 * Math.PI)
 
 const horner = (coefficients: readonly number[], x: number) => coefficients.reduce((sum, c) => sum * x + c, 0)
+
+/** x + 1/(x + 2/(x + 3/(x + …))): the continued fraction of the far tail, deep enough from x = 5 on. Laplace. */
+function toMillsDivisor(x: number): number {
+  let divisor = x
+  for (let depth = 40; depth >= 1; depth--) divisor = x + depth / divisor
+  return divisor
+}
 
 /**
  * The standard normal distribution function Φ(z): Hart's double-precision rational approximation with a continued
@@ -19,9 +26,6 @@ export function toNormalCdf(z: number): number {
   const x = Math.abs(z)
   if (x > 37) return z > 0 ? 1 : 0
   const bell = Math.exp((-x * x) / 2)
-  const tail =
-    x < 7.07106781186547
-      ? (bell * horner(upper, x)) / horner(lower, x)
-      : bell / (x + 1 / (x + 2 / (x + 3 / (x + 4 / (x + 0.65))))) / rootTwoPi
+  const tail = x < 5 ? (bell * horner(upper, x)) / horner(lower, x) : bell / toMillsDivisor(x) / rootTwoPi
   return z > 0 ? 1 - tail : tail
 }

@@ -22,4 +22,3 @@ export type SubjectKind = (typeof subjectKinds)[number]
 
 /** States of what workers take under a lease; `dead` waits for a person. */
 export const leaseStates = ['waiting', 'done', 'dead'] as const
-export type LeaseState = (typeof leaseStates)[number]

@@ -3,6 +3,5 @@ export const photoStates = ['staged', 'kept', 'removed'] as const
 
 /** Widths every photo is kept at, in pixels; WebP, and a JPEG of the middle one for mails. */
 export const photoWidths = [320, 960, 2048] as const
-export type PhotoWidth = (typeof photoWidths)[number]
 
 export const photoLimits = { files: 6, bytes: 25 * 1024 * 1024, pixels: 50e6 }

@@ -55,16 +55,6 @@ export function DateField(props: Around & ComponentProps<'input'>) {
   return <Field {...props} type="date" />
 }
 
-/** A field for files. */
-export function FileField({ label, hint, error, ...rest }: Around & ComponentProps<'input'>) {
-  const wired = useWiring({ label, hint, error }, rest.name)
-  return (
-    <Labelled label={label} hint={hint} error={error} id={wired.id}>
-      <input {...rest} {...wired} type="file" className="control" />
-    </Labelled>
-  )
-}
-
 /** A field of several lines. */
 export function TextArea({ label, hint, error, ...rest }: Around & ComponentProps<'textarea'>) {
   const wired = useWiring({ label, hint, error }, rest.name)

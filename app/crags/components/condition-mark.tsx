@@ -42,11 +42,15 @@ function Shape({ state }: { state: ConditionState }) {
 /** A condition's mark, told by its shape and not by colour alone; with its word unless that stands beside it. */
 export function ConditionMark(props: { state: ConditionState; size: number; decorative?: boolean }) {
   const { state, size, decorative } = props
-  const named = decorative
-    ? { 'aria-hidden': true as const }
-    : { role: 'img', 'aria-label': conditionWords[state] }
+  const drawn = { width: size, height: size, viewBox: '0 0 16 16', className: 'inline-block flex-none' }
+  if (decorative)
+    return (
+      <svg {...drawn} aria-hidden="true">
+        <Shape state={state} />
+      </svg>
+    )
   return (
-    <svg width={size} height={size} viewBox="0 0 16 16" className="inline-block flex-none" {...named}>
+    <svg {...drawn} role="img" aria-label={conditionWords[state]}>
       <Shape state={state} />
     </svg>
   )

@@ -29,7 +29,13 @@ export function LineChooser(props: { lengthM: number; points: DrawnPoint[]; grou
   return (
     <fieldset>
       <legend className="sr-only">The fixed points of the route, from the ground up</legend>
-      <svg viewBox={`0 0 ${width} ${height}`} className="block h-auto w-full max-w-[560px]">
+      {/* biome-ignore lint/a11y/useSemanticElements: an SVG has no element for a group of controls */}
+      <svg
+        viewBox={`0 0 ${width} ${height}`}
+        className="block h-auto w-full max-w-[560px]"
+        aria-label="The line of the route"
+        role="group"
+      >
         <LineScene scale={scale} centre={centre} rock={rock} assumed={points.some(point => point.assumed)} />
         <path
           d={`M${centre} ${toY(scale, 0)}V${toY(scale, lengthM)}`}

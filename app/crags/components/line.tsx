@@ -55,6 +55,7 @@ export function Line(props: Props) {
   const assumed = points.some(point => point.assumed)
   return (
     <figure>
+      {/* biome-ignore lint/a11y/useSemanticElements: an SVG has no element for a group of links */}
       <svg
         viewBox={`0 0 ${width} ${height}`}
         className="block h-auto w-full max-w-[580px]"

@@ -40,7 +40,7 @@ export function UrgencyWords({ judgement, name }: { judgement: Judgement; name: 
         {spread > 1.5 &&
           ` Not sure yet: between ${formatTwoDigits(judgement.timesLow)} and ${formatTwoDigits(judgement.timesHigh)} times.`}
       </p>
-      {judgement.load !== null && judgement.strength.length > 0 && (
+      {judgement.deciding === 'breaks' && judgement.load !== null && judgement.strength.length > 0 && (
         <OverlapChart
           load={judgement.load}
           strength={judgement.strength}

@@ -5,6 +5,7 @@ import { Strip } from '~/crags/components/strip'
 import { conditionShort } from '~/crags/condition-state'
 import { trafficWords } from '~/crags/crag'
 import { findConsent, findCrag } from '~/crags/crags.server'
+import { listNearby } from '~/crags/nearby.server'
 import { formatGear, formatOpen, formatWorst } from '~/crags/place-words'
 import { parseSlug, toSlug } from '~/lib/code'
 import { toDay } from '~/lib/dates'
@@ -36,6 +37,7 @@ export async function loader({ params, context }: Route.LoaderArgs) {
   return {
     crag,
     consent: await findConsent(db, crag.id),
+    nearby: await listNearby(db, viewer, crag),
     notices: await noticesInForce(db, viewer, { now, cragId: crag.id }),
     sectors: [...groupBy(climbs, climb => climb.sectorName)].map(([name, list]) => ({ name, climbs: list })),
   }
@@ -49,7 +51,7 @@ const consentWords = {
 }
 
 export default function Crag({ loaderData }: Route.ComponentProps) {
-  const { crag, consent, notices, sectors } = loaderData
+  const { crag, consent, nearby, notices, sectors } = loaderData
   return (
     <Page
       title={crag.name}
@@ -92,6 +94,22 @@ export default function Crag({ loaderData }: Route.ComponentProps) {
               </li>
             ))}
           </ul>
+          {nearby.length > 0 && (
+            <>
+              <h2 className="mt-6 text-1 font-semibold text-slate">Near here</h2>
+              <ul className="mt-2 border-t border-rule">
+                {nearby.map(other => (
+                  <li key={other.code} className="flex items-center gap-3 border-b border-rule py-2">
+                    <ConditionMark state={other.worstState} size={14} decorative />
+                    <Link to={`/crags/${toSlug(other.name, other.code)}`} className="plain-link grow">
+                      {other.name}
+                    </Link>
+                    <span>{`${other.km.toFixed(1)} km`}</span>
+                  </li>
+                ))}
+              </ul>
+            </>
+          )}
           <p className="mt-4">
             <ButtonLink to={`/report?crag=${crag.code}`} kind="quiet">
               Report fixed gear here
