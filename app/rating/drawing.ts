@@ -25,9 +25,12 @@ function toCommonest(inputs: RatingInputs, picker: Picker): Lognormal | null {
   return loads.reduce((most, next) => (next.rate > most.rate ? next : most)).load
 }
 
-/** The strength drawn (kN): of the part of which most are bad. */
+/** The strength drawn (kN): of the weakest part, by how many of it are bad or by a gate that is not shut. */
 export function toDrawnStrength(inputs: RatingInputs, picker: Picker): Mixture {
-  const all = listStrengths(inputs, picker).map(({ strength }) => strength)
+  const all = listStrengths(inputs, picker)
   if (all.length === 0) return []
-  return all.reduce((worst, next) => (next[2]!.weight > worst[2]!.weight ? next : worst))
+  const weakness = ({ strength, cap }: (typeof all)[number]) => (cap === null ? strength[2]!.weight : 1)
+  const { strength, cap } = all.reduce((worst, next) => (weakness(next) > weakness(worst) ? next : worst))
+  if (cap === null) return strength
+  return strength.map(part => (part.median > cap.median ? { ...cap, weight: part.weight } : part))
 }

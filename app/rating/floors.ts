@@ -29,7 +29,7 @@ function toWearFloor(part: PartInput): string | null {
   const depth = toDeepest(part)
   if (guide !== undefined && depth >= guide - 1e-9) {
     const at = `${Math.round(depth * 100)} % of the bar is worn away`
-    if (part.kind === 'ring' && depth < 0.33) return `${at}; a ring is planned for replacing from 25 %`
+    if (part.kind === 'ring' && depth < 0.33 - 1e-9) return `${at}; a ring is planned for replacing from 25 %`
     const from = part.kind === 'ring' ? 33 : Math.round(guide * 100)
     return `${at}; such a part is replaced from ${from} %`
   }

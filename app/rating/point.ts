@@ -1,29 +1,45 @@
 import type { PartInput, RatingInputs } from './inputs'
-import type { Mixture } from './lognormal'
+import type { Lognormal, Mixture } from './lognormal'
 import type { Picker } from './picker'
 import { failStation } from './station'
-import { toStrength } from './strength'
+import { toCap, toStrength } from './strength'
 import { loadGrid, toMixtureTable } from './tables'
 
 const isMissing = (part: PartInput) => part.findings.some(found => found.kind === 'missing')
 
-/** Parts that carry: resin holds by its bolt, and counts by itself only where something was found on it. */
+const bonded: readonly PartInput['kind'][] = ['bonded_eye', 'bonded_staple', 'bonded_stud']
+
+/** Parts that carry: faults of the resin count to the glued bolt it holds; resin without one stands for it. */
 function listCarrying(parts: readonly PartInput[]): PartInput[] {
-  return parts.filter(part => part.kind !== 'resin' || part.findings.some(found => found.kind !== 'no_fault'))
+  const isHeld = (resin: PartInput) =>
+    parts.some(part => part.side === resin.side && bonded.includes(part.kind))
+  return parts
+    .filter(part => part.kind !== 'resin' || !isHeld(part))
+    .map(part => {
+      if (!bonded.includes(part.kind)) return part
+      const resin = parts.filter(({ kind, side }) => kind === 'resin' && side === part.side)
+      const faults = resin.flatMap(({ findings }) => findings.filter(({ kind }) => kind !== 'no_fault'))
+      return faults.length === 0 ? part : { ...part, findings: [...part.findings, ...faults] }
+    })
 }
 
-/** The strength of each part as it is now, in the order of the inputs. */
-export function listStrengths(
-  inputs: RatingInputs,
-  picker: Picker,
-): { part: PartInput; strength: Mixture }[] {
-  return listCarrying(inputs.parts).map((part, i) => ({
-    part,
-    strength: picker.step(`strength ${i}`, () => toStrength(part, inputs.place, picker)),
-  }))
+interface PartStrength {
+  part: PartInput
+  strength: Mixture
+  /** a weaker way to be loaded, in series with the strength along the axis */
+  cap: Lognormal | null
 }
 
-type Strengths = ReturnType<typeof listStrengths>
+/** The strength of each part as it is now, kN. */
+export function listStrengths(inputs: RatingInputs, picker: Picker): PartStrength[] {
+  return listCarrying(inputs.parts).map((part, i) =>
+    picker.step(`strength ${i}`, () => ({
+      part,
+      strength: toStrength(part, inputs.place, picker),
+      cap: toCap(part, picker),
+    })),
+  )
+}
 
 /** Puts one more part in series over the grid: F ← F + q − Fq. */
 function joinInSeries(all: Float64Array, one: Float64Array): void {
@@ -31,16 +47,22 @@ function joinInSeries(all: Float64Array, one: Float64Array): void {
 }
 
 /** Parts in series under one load: the chance that the first of them has failed at factor × x, for each x of the grid. */
-function toSeries(strengths: Strengths, factor: number): Float64Array {
+function toSeries(strengths: readonly PartStrength[], factor: number): Float64Array {
   const all = new Float64Array(loadGrid.length)
-  for (const { part, strength } of strengths) {
+  for (const { part, strength, cap } of strengths) {
     if (isMissing(part)) return all.fill(1)
     joinInSeries(all, toMixtureTable(strength, factor))
+    if (cap !== null) joinInSeries(all, toMixtureTable([{ weight: 1, ...cap }], factor))
   }
   return all
 }
 
-function toTwoSides(a: Strengths, b: Strengths, inputs: RatingInputs, picker: Picker): Float64Array {
+function toTwoSides(
+  a: readonly PartStrength[],
+  b: readonly PartStrength[],
+  inputs: RatingInputs,
+  picker: Picker,
+): Float64Array {
   const k = picker.pick('shock')
   // a side that nobody spoke of was not looked at
   const c = picker.pick(`common.${inputs.otherSide ?? 'not_looked_at'}`)

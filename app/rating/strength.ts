@@ -3,7 +3,7 @@ import type { ConditionState } from '~/crags/condition-state'
 import type { PartKind } from '~/crags/part'
 import { type Cracking, isOfFabric, isStainless, toCracking } from './cracking'
 import type { PartInput, RatingInputs } from './inputs'
-import type { Mixture } from './lognormal'
+import type { Lognormal, Mixture } from './lognormal'
 import type { Population } from './model-strengths'
 import type { Picker } from './picker'
 import { toSectionLeft } from './wear'
@@ -43,8 +43,8 @@ function toPopulation(part: PartInput): Population {
     : population
 }
 
-/** The cap that a finding puts on a connector's median, kN, with the spread it has at least; null without one. */
-function toCap(part: PartInput, picker: Picker): { median: number; zeta: number } | null {
+/** What a connector holds when it is not loaded along its axis with the gate shut, kN; null where it is. */
+export function toCap(part: PartInput, picker: Picker): Lognormal | null {
   const has = (kind: string) => part.findings.some(found => found.kind === kind)
   if (has('nose_hooked')) return { median: picker.pick('cap.nose_hooked'), zeta: 0.5 }
   if (has('gate_stuck')) return { median: picker.pick('cap.gate_open'), zeta: 0.12 }
@@ -77,21 +77,14 @@ function toCountedCracking(part: PartInput, place: RatingInputs['place'], picker
 }
 
 /**
- * The strength of a part as it is now, three populations with their weights (kN): what stands on record and was found
- * decides how many of its kind are weak or bad; wear and a gate left open lower what all of them hold.
+ * The strength of a part as it is now along its axis, three populations with their weights (kN): what stands on record
+ * and was found decides how many of its kind are weak or bad; wear lowers what all of them hold.
  */
 export function toStrength(part: PartInput, place: RatingInputs['place'], picker: Picker): Mixture {
   const cracking = toCountedCracking(part, place, picker)
   const weights = toWeights(listWeightNames(part, place, cracking), picker)
   const population = cracking === null ? toPopulation(part) : 'cracking'
-  const mixture = mix(population, weights, toSectionLeft(part, picker), picker)
-  const cap = toCap(part, picker)
-  if (cap === null) return mixture
-  return mixture.map(({ weight, median, zeta }) => ({
-    weight,
-    median: Math.min(median, cap.median),
-    zeta: Math.max(zeta, cap.zeta),
-  }))
+  return mix(population, weights, toSectionLeft(part, picker), picker)
 }
 
 const pointPopulation: Partial<Record<AnchorKind, Population>> = { peg: 'peg', thread: 'thread' }

@@ -59,10 +59,6 @@ const byKind: Partial<Record<FindingKind, string>> = {
 function toFindingName(found: FindingInput, part: PartInput): string | null {
   const isSound = part.findings.some(other => other.kind === 'no_fault')
   switch (found.kind) {
-    case 'rust': {
-      const grade = toRustGrade(found)
-      return grade === 0 ? null : `rust${grade}`
-    }
     case 'loose_in_hole':
       return part.kind === 'peg' ? 'peg_loose' : 'loose_in_hole'
     case 'turns_by_hand':
@@ -90,18 +86,24 @@ function toPriorName(part: PartInput): string {
   return 'good'
 }
 
+/** The worst grade of rust that was seen, or is to be expected where nobody looked; 0 for none. */
+function toWorstRust(part: PartInput, place: RatingInputs['place']): number {
+  const seen = part.findings.map(found => (found.kind === 'rust' ? toRustGrade(found) : 0))
+  const isLooked = part.findings.some(({ kind }) => kind === 'no_fault')
+  return Math.max(0, ...seen, isLooked ? 0 : (toExpectedRust(part, place) ?? 0))
+}
+
 /** The rows of the model whose weights add up for a part: its prior, what was found, what place and age let expect. */
 export function listWeightNames(
   part: PartInput,
   place: RatingInputs['place'],
   cracking: Cracking | null,
 ): string[] {
-  const found = part.findings.flatMap(finding => toFindingName(finding, part) ?? [])
-  if (cracking !== null)
-    return [...new Set([`cracking_${cracking}`, ...found.filter(name => !name.startsWith('rust'))])]
-  const looked = part.findings.some(({ kind }) => kind === 'no_fault' || kind === 'rust')
-  const rust = looked ? null : toExpectedRust(part, place)
-  return [...new Set([toPriorName(part), ...found, ...(rust === null ? [] : [`rust${rust}`])])]
+  const names = [toPriorName(part), ...part.findings.flatMap(found => toFindingName(found, part) ?? [])]
+  const rust = toWorstRust(part, place)
+  if (rust > 0) names.push(`rust${rust}`)
+  if (cracking !== null) names.push(`cracking_${cracking}`)
+  return [...new Set(names)]
 }
 
 /** Findings add to the prior, w = 1 − Π(1 − wᵢ), and never replace it; bad is cut at 1 and weak at what it leaves. */

@@ -1,9 +1,11 @@
 import type { AnchorKind } from '~/crags/anchor'
 import type { Traffic } from '~/crags/crag'
 import type { Material, PartKind } from '~/crags/part'
+import { evaluate } from '~/rating/evaluate'
 import type { FindingKind } from '~/rating/finding'
 import type { FindingInput, PartInput, RatingInputs } from '~/rating/inputs'
 import { modelRows, toModel } from '~/rating/model'
+import { createPicker } from '~/rating/picker'
 import { rate } from '~/rating/rate'
 
 const model = toModel(modelRows)
@@ -81,6 +83,9 @@ export function hangingFromTwo(shared: PartInput, material: Material = 'stainles
     shared,
   ]
 }
+
+/** R a year of a case with every number of the first model central, without the runs for its range. */
+export const centralRate = (inputs: RatingInputs) => evaluate(inputs, createPicker(model)).rate
 
 /** The rating of a case with the first model. */
 export const rated = (inputs: RatingInputs) => rate(inputs, model)

@@ -16,6 +16,12 @@ const both = (a: Parameters<typeof part>[1], b: Parameters<typeof part>[1]) => [
   part('bonded_eye', a, { side: 'a', id: 'a' }),
   part('bonded_eye', b, { side: 'b', id: 'b' }),
 ]
+const rust = (grade: number) => found('rust', { low: grade, high: grade, unit: 'grade' })
+const chained = (a: Parameters<typeof part>[1]) => [
+  ...both(sound, sound),
+  part('chain', a, { side: 'a', id: 'chain-a' }),
+  part('chain', [], { side: 'b', id: 'chain-b' }),
+]
 const ring = (findings: Parameters<typeof part>[1]) =>
   hangingFromTwo(part('ring', findings, { sizeMm: 10, ageYears: 8 }))
 
@@ -123,7 +129,63 @@ const cases: [want: Band | Band[], title: string, inputs: RatingInputs][] = [
     'a faded sling on a fixed draw',
     at(5, [part('bonded_eye', sound, { ageYears: 6 }), part('sling', [found('fabric_faded')])]),
   ],
+  [
+    ['soon', 'turn'],
+    'a hanger missing mid-route between close bolts',
+    at(mid, bolt([found('missing')]), { spacing: 1.2 }),
+  ],
+  [
+    'soon',
+    'stainless by a warm sea with rust spots, mid-route',
+    at(mid, [part('bonded_eye', [rust(2)])], { sea: true }),
+  ],
+  [
+    'soon',
+    'stainless by a warm sea with rust spots on one side of a lower-off',
+    at(lowerOff, both([rust(2)], []), { sea: true, otherSide: 'not_looked_at' }),
+  ],
+  [
+    'soon',
+    'a self-drilled bolt by the sea, mid-route',
+    at(mid, [part('self_drilled', []), part('hanger', [])], { sea: true }),
+  ],
+  [
+    'soon',
+    'a rope run over a hanger’s edge when abseiling',
+    {
+      ...at(
+        lowerOff,
+        [
+          ...both(sound, sound),
+          part('hanger', [found('rope_over_edge')], { side: 'a', id: 'hanger-a' }),
+          part('hanger', [], { side: 'b', id: 'hanger-b' }),
+        ],
+        { kind: 'abseil_station', otherSide: 'looked_at' },
+      ),
+      usedFor: { lowering: false, abseil: true, toprope: false },
+    },
+  ],
+  [
+    'soon',
+    'a belay with one of two bolts loose in its hole',
+    at(lowerOff, both([found('loose_in_hole')], []), { kind: 'stance', otherSide: 'not_looked_at' }),
+  ],
+  [
+    ['first', 'soon'],
+    'a rusty peg, the sole protection on a sea cliff',
+    at(1, [part('peg', [rust(4)])], { kind: 'peg', sea: true, traffic: 'quiet' }),
+  ],
 
+  [
+    'turn',
+    'a nut that is finger-tight on a sound stud, bolt 3',
+    at(3, bolt([found('nut_loose'), found('no_fault')])),
+  ],
+  [
+    'turn',
+    'flaking rust on one leg of a chain',
+    at(lowerOff, chained([rust(4)]), { otherSide: 'not_looked_at' }),
+  ],
   [
     'turn',
     'a ring worn a third, smooth and round',
@@ -182,6 +244,18 @@ const cases: [want: Band | Band[], title: string, inputs: RatingInputs][] = [
   ],
 
   ['watch', 'a good bolt 2', at(2, [part('bonded_eye', sound, { ageYears: 8 })])],
+  ['watch', 'a good bolt 8, busy', at(8, glue(sound), { traffic: 'busy' })],
+  ['watch', 'patches of rust mid-route', at(mid, [part('wedge_bolt', [rust(3)], { ageYears: 8 })])],
+  [
+    'watch',
+    'a plate hanger’s edge mid-route that has nicked nothing yet',
+    at(mid, [part('wedge_bolt', sound), part('hanger', [found('sharp_edge_hanger')])]),
+  ],
+  [
+    'watch',
+    'a plate hanger sharp on the rope’s side mid-route, where the rope hangs in a draw',
+    at(mid, [part('wedge_bolt', sound), part('hanger', [found('sharp_edge_rope')])]),
+  ],
   ['watch', 'a new bolt 3', at(3, [part('bonded_eye', [], { ageYears: 0.5 })])],
   [
     'watch',
@@ -214,9 +288,75 @@ const cases: [want: Band | Band[], title: string, inputs: RatingInputs][] = [
   ],
 ]
 
+/** The line of the story: eight bolts and a lower-off at 18.5 m, climbed often, by a warm sea. */
+const slackWater: RatingInputs = {
+  climb: {
+    lengthM: 18.5,
+    traffic: 'busy',
+    ascentsPerYear: null,
+    start: 'ground',
+    below: 'ground',
+    ledges: [],
+    points: [2.1, 3.9, 5.6, 7.6, 9.7, 11.9, 14, 16.3, 18.5].map((alongM, i) => ({
+      kind: i === 8 ? 'lower_off' : 'bolt',
+      alongM,
+      assumed: false,
+      state: 'unknown',
+    })),
+  },
+  at: 8,
+  crux: 'ordinary',
+  parts: [],
+  place: { seaKm: 0.1, warmSea: true, corrosivity: null },
+  otherSide: null,
+  usedFor: { lowering: true, abseil: false, toprope: true },
+}
+const groove = found('groove', { ...third, edge: 'sharp' })
+
 describe('The rating of what people really report', () => {
   it.each(cases)('is %s for %s', (want, title, inputs) => {
     const got = rated(inputs)
     expect([want].flat(), `${title}: R ${got.rate.toExponential(2)}`).toContain(got.band)
+  })
+
+  it('is Mend first for a steel ring worn a third and sharp at the top of a busy line, because it cuts the rope', () => {
+    const parts = hangingFromTwo(part('ring', [groove], { sizeMm: 10, material: 'steel' }))
+    const got = rated({ ...slackWater, parts, otherSide: 'looked_at' })
+    expect(got).toMatchObject({ band: 'first', worst: 'ground', deciding: 'cuts_rope' })
+    expect(got.floors).toContain('33 % of the bar is worn away; such a part is replaced from 33 %')
+    expect(got.lookNext).toBe('run a fingernail over the edge, and photograph it close')
+  })
+
+  it('is Mend first for the same ring when nothing else of the lower-off is on record', () => {
+    expect(rated({ ...slackWater, parts: [part('ring', [groove])] }).band).toBe('first')
+  })
+
+  it('could be Mend first for bolt 2 of unknown age', () => {
+    expect(rated(at(2, bolt([]))).bandHigh).toBe('first')
+  })
+
+  it('could be Mend first for stainless by a warm sea with rust spots', () => {
+    expect(rated(at(mid, [part('bonded_eye', [rust(2)])], { sea: true })).bandHigh).toBe('first')
+    const one = at(lowerOff, both([rust(2)], []), { sea: true, otherSide: 'not_looked_at' })
+    expect(rated(one).bandHigh).toBe('first')
+  })
+
+  it('says of a nut on a sound stud that it is a five-minute job', () => {
+    const got = rated(at(3, bolt([found('nut_loose'), found('no_fault')])))
+    expect(got.lookNext).toBe('a spanner on the nut, five minutes')
+  })
+
+  it('holds a point by the sea whose stainless steel may crack unseen at In turn or above', () => {
+    const got = rated(at(8, glue(sound), { sea: true, traffic: 'quiet' }))
+    expect(got.floors).toEqual(['stainless steel by a warm sea may crack unseen'])
+    expect(got.bandLow).toBe('turn')
+  })
+
+  it('is more urgent for a lower-off that has lost a side, and for one that has lost its only ring', () => {
+    const whole = rated(at(lowerOff, both(sound, sound), { otherSide: 'looked_at' })).rate
+    const side = rated(at(lowerOff, both(sound, [found('missing')]), { otherSide: 'looked_at' })).rate
+    const all = rated(at(lowerOff, hangingFromTwo(part('ring', [found('missing')])))).rate
+    expect(side).toBeGreaterThan(whole)
+    expect(all).toBeGreaterThan(1e-3)
   })
 })
