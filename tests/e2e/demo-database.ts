@@ -5,7 +5,7 @@ import { promisify } from 'node:util'
 import { createConnection } from 'mysql2/promise'
 import { appUser, type RunningDatabase, startDatabase } from '../../app/commands/database.mjs'
 import { sweepFolders } from '../../app/commands/database-folder.mjs'
-import { startTask } from './child'
+import { startTask } from './tasks'
 
 /** The moment every journey begins at, on the app's own clock. */
 export const dawn = '2027-05-14T08:30:00.000Z'

@@ -5,8 +5,8 @@ import { findFreePort } from '../../app/commands/ports.mjs'
 import type { Settings } from '../../app/web/settings'
 import { type FakeMail, type Letter, start as startMail } from '../../fakes/mail/server'
 import { groundFile } from './build.global'
-import { endTask, startTask } from './child'
 import { type DemoServer, dawn, startDemoServer } from './demo-database'
+import { endTask, startTask } from './tasks'
 
 export { expect }
 
