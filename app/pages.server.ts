@@ -9,6 +9,7 @@ import { type KnownViewer, viewerContext } from './people/viewer-context'
 import { toAct } from './record/acts.server'
 import { takeUploads } from './reports/uploads.server'
 import { type Uploads, uploadsContext } from './reports/uploads-context'
+import { answerWhileAway } from './web/away-answers.server'
 import { clockContext, databaseContext, nonceContext, settingsContext, wakeContext } from './web/context'
 import { findCookie, guestCookie, sessionCookie, toSetCookie } from './web/cookies'
 import { isDatabaseAway } from './web/database-away'
@@ -92,6 +93,11 @@ const namedForms = ['/sign-in', '/sign-in/code', '/report/:climb/:point', '/orde
   path => [path, `${path}.data`],
 )
 
+async function loadBuild(vite: ViteDevServer | undefined): Promise<ServerBuild> {
+  if (vite === undefined) return await import('virtual:react-router/server-build')
+  return (await vite.ssrLoadModule('virtual:react-router/server-build')) as ServerBuild
+}
+
 /** The pages of the product, by the framework, behind knowing the viewer and taking photos up. */
 export function toPages(given: Given): Router {
   const { db, clock, settings, vite } = given
@@ -114,10 +120,7 @@ export function toPages(given: Given): Router {
   )
   pages.use(
     createRequestHandler({
-      build:
-        vite === undefined
-          ? () => import('virtual:react-router/server-build')
-          : () => vite.ssrLoadModule('virtual:react-router/server-build') as Promise<ServerBuild>,
+      build: async () => answerWhileAway(await loadBuild(vite)),
       mode: settings.production ? 'production' : 'development',
       getLoadContext(request: Known, response) {
         const context = new RouterContextProvider()

@@ -4,10 +4,12 @@ import { resolve } from 'node:path'
 import compression from 'compression'
 import express, { type ErrorRequestHandler, type Express } from 'express'
 import type { ViteDevServer } from 'vite'
-import { openDatabase } from './db/client.server'
+import { type Database, openDatabase } from './db/client.server'
 import { keepGround } from './map/ground.server'
 import { groundHandler } from './map/ground-handler.server'
 import { toPages } from './pages.server'
+import { adoptFirstModel } from './rating/models.server'
+import { toAct } from './record/acts.server'
 import { servePhotos } from './reports/photo-serving.server'
 import { capBodies } from './web/body.server'
 import { toClock } from './web/clock.server'
@@ -52,6 +54,15 @@ function serveFiles(app: Express): void {
   app.use(express.static(client, { maxAge: '1h', index: false }))
 }
 
+/** An installation rates by model 1 from its first start; a database that is away is met again at the next one. */
+async function adoptModel(db: Database, clock: () => Date): Promise<void> {
+  try {
+    await adoptFirstModel(db, toAct(clock(), { kind: 'system', personId: null }))
+  } catch (error) {
+    log.warn({ err: error }, 'the rating model could not be looked up')
+  }
+}
+
 /**
  * Serves the product on the settings' address until `close`: pages, photos, ground tiles, and the worker that sends
  * mails and does jobs. With `vite` the pages come from the sources (development).
@@ -62,6 +73,7 @@ export async function serve(
 ): Promise<{ url: string; close(): Promise<void> }> {
   const { db, close: closeDatabase } = openDatabase(settings.databaseUrl)
   const clock = toClock(settings.clockAt)
+  await adoptModel(db, clock)
   const work = startWork({ db, settings, clock })
   const given = { db, clock, settings, vite, wake: work.wake }
 

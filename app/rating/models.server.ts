@@ -1,18 +1,24 @@
 import { asc, desc, eq } from 'drizzle-orm'
-import type { Queryable } from '~/db/client.server'
+import type { Database, Queryable } from '~/db/client.server'
 import { ratingModels, ratingValues } from '~/db/schema/rating'
+import { inTransaction, isDuplicate } from '~/db/transaction.server'
 import type { Act } from '~/record/act'
 import { modelRows, type RatingModel, toModel } from './model'
 
 const loaded = new Map<string, RatingModel>()
 
 /** Puts rating model 1 on record when the installation has none yet. */
-export async function adoptFirstModel(db: Queryable, act: Act): Promise<void> {
+export async function adoptFirstModel(db: Database, act: Act): Promise<void> {
   const [present] = await db.select({ id: ratingModels.id }).from(ratingModels).limit(1)
   if (present !== undefined) return
   const id = act.newId()
-  await db.insert(ratingModels).values({ id, number: 1, adoptedAt: act.now })
-  await db.insert(ratingValues).values(modelRows.map(row => ({ modelId: id, ...row })))
+  await inTransaction(db, async tx => {
+    await tx.insert(ratingModels).values({ id, number: 1, adoptedAt: act.now })
+    await tx.insert(ratingValues).values(modelRows.map(row => ({ modelId: id, ...row })))
+  }).catch(error => {
+    // another process of the same installation did it at the same moment
+    if (!isDuplicate(error)) throw error
+  })
 }
 
 /** The rating model in force, with its id; read once per process, since an adopted model is never changed. */

@@ -5,6 +5,7 @@ import type { NextFunction, Request, RequestHandler, Response } from 'express'
 import multer, { MulterError } from 'multer'
 import type { Database } from '~/db/client.server'
 import type { Act } from '~/record/act'
+import { isDatabaseAway } from '~/web/database-away'
 import { cappedDisk } from './capped-disk.server'
 import { photoLimits } from './photo'
 import { PhotoRefused, type TakenPhoto, takePhotoFile } from './photo-files.server'
@@ -20,6 +21,13 @@ function toFormData(body: Record<string, string | string[]>): FormData {
   for (const [name, value] of Object.entries(body))
     for (const one of Array.isArray(value) ? value : [value]) formData.append(name, one)
   return formData
+}
+
+interface Given {
+  photoDir: string
+  db: Database
+  ownerOf: (request: Request) => string | null
+  toAct: (request: Request) => Act
 }
 
 const megabytes = photoLimits.bytes / 1024 / 1024
@@ -45,6 +53,26 @@ async function takeAll(photoDir: string, files: Express.Multer.File[]) {
   return { taken, refused }
 }
 
+/** Stages what was taken up; while the database is away the files go again, and the form goes on to say so. */
+async function stageOrDrop(
+  given: Given,
+  request: Request,
+  owner: string,
+  taken: TakenPhoto[],
+  refused: string[],
+): Promise<TakenPhoto[]> {
+  try {
+    await stagePhotos(given.db, given.toAct(request), owner, taken)
+    return taken
+  } catch (error) {
+    if (!isDatabaseAway(error)) throw error
+    for (const { key } of taken) await rm(join(given.photoDir, key), { recursive: true, force: true })
+    if (taken.length > 0)
+      refused.push('The photos could not be kept just now. Choose them again when you send the form again.')
+    return []
+  }
+}
+
 /** The file's name as the person knows it: browsers send UTF-8, the form parser reads Latin-1. */
 function toName(name: string): string {
   return Buffer.from(name, 'latin1').toString('utf8').slice(0, 80)
@@ -55,12 +83,7 @@ function toName(name: string): string {
  * the others), stages them for whoever sent them, and leaves fields and outcome on `request.uploads`. A request without
  * a session or guest cookie is refused before anything is written.
  */
-export function takeUploads(given: {
-  photoDir: string
-  db: Database
-  ownerOf: (request: Request) => string | null
-  toAct: (request: Request) => Act
-}): RequestHandler {
+export function takeUploads(given: Given): RequestHandler {
   const incoming = join(given.photoDir, 'incoming')
   mkdirSync(incoming, { recursive: true })
   const parse = multer({
@@ -94,8 +117,7 @@ export function takeUploads(given: {
     if (error !== undefined && error !== null && !(error instanceof MulterError)) throw error
     if (error instanceof MulterError) uploads.refused.push(broken)
     const { taken, refused } = await takeAll(given.photoDir, files)
-    await stagePhotos(given.db, given.toAct(request), owner, taken)
-    uploads.staged = taken
+    uploads.staged = await stageOrDrop(given, request, owner, taken, refused)
     uploads.refused.push(...refused)
     ;(request as Request & { uploads?: Uploads }).uploads = uploads
   }

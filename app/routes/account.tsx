@@ -83,7 +83,7 @@ function AboutYou({ person, answer }: { person: Loaded['person']; answer: FormAn
   const typed = answer?.typed ?? {}
   const kept = 'name' in typed
   return (
-    <Form method="post" className="mt-6 grid max-w-md gap-4">
+    <Form method="post" noValidate className="mt-6 grid max-w-md gap-4">
       <Field
         label="Name"
         name="name"
@@ -135,10 +135,10 @@ function SignedIn({ sessions }: { sessions: Loaded['sessions'] }) {
         ))}
       </ul>
       <div className="mt-4 flex flex-wrap gap-3">
-        <Form method="post" action="/sign-out">
+        <Form method="post" noValidate action="/sign-out">
           <Button kind="quiet">Sign out of this browser</Button>
         </Form>
-        <Form method="post">
+        <Form method="post" noValidate>
           <Button kind="quiet" name="intent" value="sign-out-everywhere" pending={pending}>
             Sign out everywhere
           </Button>

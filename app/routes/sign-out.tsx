@@ -34,7 +34,7 @@ export default function SignOut() {
   const pending = useNavigation().formMethod !== undefined
   return (
     <Page title="Sign out" lead="You can go on reading the record and reporting without signing in.">
-      <Form method="post" className="mt-6">
+      <Form method="post" noValidate className="mt-6">
         <Button pending={pending}>Sign out of this browser</Button>
       </Form>
     </Page>

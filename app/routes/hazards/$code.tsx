@@ -139,7 +139,7 @@ export default function HazardPage({ loaderData, actionData }: Route.ComponentPr
               <ButtonLink to={`/orders/new?hazard=${hazard.code}`}>Make order</ButtonLink>
             )}
             {may.warn && (
-              <Form method="post">
+              <Form method="post" noValidate>
                 <Button kind="quiet" pending={busy}>
                   Publish first warning
                 </Button>

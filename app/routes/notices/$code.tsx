@@ -145,7 +145,7 @@ export default function NoticePage({ loaderData, actionData }: Route.ComponentPr
         </span>
       </div>
       {(may.confirm || may.withdraw) && (
-        <Form method="post" className="mt-6 flex flex-wrap gap-3">
+        <Form method="post" noValidate className="mt-6 flex flex-wrap gap-3">
           {may.confirm && (
             <Button kind="action" name="do" value="confirm" pending={busy}>
               Confirm warning

@@ -8,6 +8,7 @@ import { noticeKindWords, writtenKinds } from '~/notices/notice'
 import { toNoticeSchema } from '~/notices/notice.schema'
 import { publishNotice } from '~/notices/publish.server'
 import { requireCan, requirePerson } from '~/people/guards.server'
+import { can } from '~/people/viewer'
 import { viewerContext } from '~/people/viewer-context'
 import { toAct } from '~/record/acts.server'
 import { findHazard } from '~/reports/hazards.server'
@@ -29,7 +30,8 @@ async function requireHazard({ request, context }: Pick<Route.LoaderArgs, 'reque
   const code = parseCode(new URL(request.url).searchParams.get('hazard') ?? '')
   const hazard = code === null ? null : await findHazard(db, viewer, code)
   if (hazard === null) throw notFound('Notices are written from a hazard’s page. Open the hazard first.')
-  requireCan(viewer, 'notice:manage', await requireCragSubject(db, hazard.cragId), { seen: true })
+  const subject = await requireCragSubject(db, hazard.cragId)
+  requireCan(viewer, 'notice:manage', subject, { seen: can(viewer, 'urgency:see', subject) })
   const now = context.get(clockContext)()
   return { db, viewer, hazard, now, today: toDay(now, hazard.timeZone) }
 }
@@ -89,7 +91,7 @@ export default function NewNotice({ loaderData, actionData }: Route.ComponentPro
       lead={hazard.headline}
       crumbs={[{ label: hazard.cragName }, { label: 'Hazard', to: `/hazards/${hazard.code}` }]}
     >
-      <Form method="post" className="mt-5 grid max-w-[62ch] gap-5">
+      <Form method="post" noValidate className="mt-5 grid max-w-[62ch] gap-5">
         <FormErrors errors={errors} reason={actionData?.reason} />
         <Select
           label="Kind"

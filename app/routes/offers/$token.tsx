@@ -121,12 +121,12 @@ export default function Offer({ loaderData, actionData }: Route.ComponentProps) 
           <p className="mt-5 text-s text-stone">
             {`You answer as ${name}. Until ${formatMoment(expiresAt, job.timeZone)}, ${formatZone(job.timeZone)}.`}
           </p>
-          <Form method="post" className="mt-3">
+          <Form method="post" noValidate className="mt-3">
             <Button kind="action" name="do" value="accept" pending={busy}>
               Accept job
             </Button>
           </Form>
-          <Form method="post" className="mt-8 max-w-[40rem] border-t border-rule pt-4">
+          <Form method="post" noValidate className="mt-8 max-w-[40rem] border-t border-rule pt-4">
             <TextArea
               label="Cannot do it? A word, if you like"
               name="words"

@@ -104,7 +104,7 @@ export default function CheckWork({ loaderData, actionData }: Route.ComponentPro
             : 'Nothing waits for a check here now.'}
         </p>
       ) : (
-        <Form method="post" className="mt-5 grid max-w-[62ch] gap-6">
+        <Form method="post" noValidate className="mt-5 grid max-w-[62ch] gap-6">
           <FormErrors errors={errors} reason={actionData?.reason} />
           <Choices
             legend="Who are you to the work?"

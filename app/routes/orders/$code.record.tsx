@@ -145,7 +145,7 @@ export default function RecordWork({ loaderData, actionData }: Route.ComponentPr
             : `This order is ${orderStateWords[order.state]}, so there is nothing to record.`}
         </p>
       ) : (
-        <Form method="post" encType="multipart/form-data" className="mt-5 grid max-w-[62ch] gap-5">
+        <Form method="post" noValidate encType="multipart/form-data" className="mt-5 grid max-w-[62ch] gap-5">
           <FormErrors errors={errors} reason={actionData?.reason} also={actionData?.refused} />
           <input type="hidden" name="clientKey" value={value('clientKey', clientKey)} />
           <div className="grid gap-5 sm:grid-cols-2">

@@ -3,6 +3,7 @@ import { requireCragSubject } from '~/crags/crags.server'
 import { parseCode } from '~/lib/code'
 import { toDay } from '~/lib/dates'
 import { requireCan, requirePerson } from '~/people/guards.server'
+import { can } from '~/people/viewer'
 import { viewerContext } from '~/people/viewer-context'
 import { toAct } from '~/record/acts.server'
 import { findHazard } from '~/reports/hazards.server'
@@ -29,7 +30,7 @@ async function requireHazard({ request, context }: Pick<Route.LoaderArgs, 'reque
   const hazard = code === null ? null : await findHazard(db, viewer, code)
   if (hazard === null) throw notFound('Orders are made from a hazard’s page. Open the hazard first.')
   const subject = await requireCragSubject(db, hazard.cragId)
-  requireCan(viewer, 'order:manage', subject, { seen: true })
+  requireCan(viewer, 'order:manage', subject, { seen: can(viewer, 'urgency:see', subject) })
   const organisationId = subject.crag.organisations.find(
     held =>
       held.remit === 'rebolting' &&
@@ -104,7 +105,7 @@ export default function NewOrder({ loaderData, actionData }: Route.ComponentProp
         { label: hazard.headline, to: `/hazards/${hazard.code}` },
       ]}
     >
-      <Form method="post" className="mt-5 grid max-w-[62ch] gap-5">
+      <Form method="post" noValidate className="mt-5 grid max-w-[62ch] gap-5">
         <FormErrors errors={errors} reason={actionData?.reason} />
         <Select
           label="Kind of job"

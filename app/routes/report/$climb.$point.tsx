@@ -115,7 +115,7 @@ export default function ReportWhat({ loaderData, actionData }: Route.ComponentPr
       <main className="report-sheet">
         <p className="text-s text-stone">{`${climb.cragName}, ${climb.name}`}</p>
         <h1 className="mb-3 text-2 font-semibold">What is wrong?</h1>
-        <Form method="post" encType="multipart/form-data">
+        <Form method="post" noValidate encType="multipart/form-data">
           <FormErrors errors={errors} reason={actionData?.reason} also={actionData?.refused} />
           {known && (
             <p className="mt-2 text-s text-stone">{`Known already: ${known.headline}. Your look at it still helps.`}</p>

@@ -114,7 +114,7 @@ export default function ReportPage({ loaderData, actionData }: Route.ComponentPr
         <div>
           <h2 className="text-1 font-semibold">What was reported</h2>
           <ReportLines reports={[report]} findings={findings} />
-          <Form method="post" className="mt-4">
+          <Form method="post" noValidate className="mt-4">
             <ReportDecision
               undecided={undecided}
               reason={report.reason}

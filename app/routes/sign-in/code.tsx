@@ -66,7 +66,12 @@ export default function TypeCode({ loaderData, actionData }: Route.ComponentProp
         </p>
       ) : (
         <>
-          <Form method="post" action={`/sign-in/code${search}`} className="mt-6 grid max-w-md gap-4">
+          <Form
+            method="post"
+            noValidate
+            action={`/sign-in/code${search}`}
+            className="mt-6 grid max-w-md gap-4"
+          >
             <Field
               label={labels.code}
               name="code"

@@ -136,7 +136,7 @@ export default function Status({ loaderData, actionData }: Route.ComponentProps)
         </p>
       )}
       {report.state === 'needs_detail' && (
-        <Form method="post" className="mt-5 max-w-[62ch]">
+        <Form method="post" noValidate className="mt-5 max-w-[62ch]">
           <TextArea
             label="Your answer"
             name="answer"
@@ -162,7 +162,7 @@ export default function Status({ loaderData, actionData }: Route.ComponentProps)
         </p>
       )}
       {canWithdraw && (
-        <Form method="post" className="mt-6">
+        <Form method="post" noValidate className="mt-6">
           <Button kind="quiet" name="do" value="withdraw" pending={busy}>
             Take this report back
           </Button>

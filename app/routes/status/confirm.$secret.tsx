@@ -31,7 +31,7 @@ export async function action({ params, context }: Route.ActionArgs) {
 export default function Confirm() {
   return (
     <Page title="Confirm your address" lead="So that we can tell you what becomes of your report">
-      <Form method="post" className="mt-5">
+      <Form method="post" noValidate className="mt-5">
         <Button kind="action">Confirm this address</Button>
       </Form>
     </Page>

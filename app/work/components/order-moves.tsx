@@ -25,7 +25,7 @@ export function OrderMoves(props: Props) {
       {may.record && (
         <>
           <ButtonLink to={`/orders/${code}/record`}>Record work</ButtonLink>
-          <Form method="post" className="mt-5">
+          <Form method="post" noValidate className="mt-5">
             <details className="border-t border-rule pt-3" open={Boolean(errors.words)}>
               <summary className="cursor-pointer font-medium">Hand the job back</summary>
               <TextArea
@@ -47,7 +47,7 @@ export function OrderMoves(props: Props) {
       {may.check && <ButtonLink to={`/orders/${code}/check`}>Check the work</ButtonLink>}
       {may.manage && state === 'checked' && <CloseForm {...props} />}
       {may.manage && ['draft', 'offered', 'accepted'].includes(state) && (
-        <Form method="post" className="mt-5">
+        <Form method="post" noValidate className="mt-5">
           <Button kind="danger" name="do" value="cancel" pending={busy}>
             Cancel order
           </Button>
@@ -61,7 +61,7 @@ function OfferForm({ rebolters, errors, typed, busy }: Props) {
   if (rebolters.length === 0)
     return <p className="text-stone">Your organisation has no rebolter on record to offer the job to.</p>
   return (
-    <Form method="post" className="grid max-w-[26rem] gap-4">
+    <Form method="post" noValidate className="grid max-w-[26rem] gap-4">
       <Select
         label="Offer the job to"
         name="personId"
@@ -83,7 +83,7 @@ function OfferForm({ rebolters, errors, typed, busy }: Props) {
 
 function CloseForm({ photos, busy }: Props) {
   return (
-    <Form method="post">
+    <Form method="post" noValidate>
       {photos.length > 0 && (
         <fieldset className="mb-4">
           <legend className="text-s text-stone">
