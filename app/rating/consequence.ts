@@ -12,8 +12,8 @@ export const consequenceWeights: Record<ConsequenceClass, number> = {
   short: 0.001,
 }
 
-/** Metres the tie-in stands above the feet. */
-const feet = 1
+/** Metres the tie-in stands above the feet, for drawing; a rating takes it from its model. */
+const usualFeet = 1
 
 /** What a falling climber may meet, highest first, and what holds when every bolt has failed. */
 export interface Terrain {
@@ -21,13 +21,18 @@ export interface Terrain {
   hard: readonly number[]
   /** metres of the belay that catches last, on a pitch that starts at a stance; null where nothing does */
   belay: number | null
+  /** metres of the feet below the tie-in */
+  feet: number
 }
 
 /** The terrain of a line: its ledges, and the ground, sea, stance or ledge at its foot unless there is only air. */
-export function toTerrain(line: Pick<RatedLine, 'ledges' | 'below' | 'start'>): Terrain {
+export function toTerrain(
+  line: Pick<RatedLine, 'ledges' | 'below' | 'start'>,
+  feet: number = usualFeet,
+): Terrain {
   const ledges = line.ledges.map(({ atM }) => atM).filter(at => at > 0)
   const hard = line.below === 'air' ? ledges : [...ledges, 0]
-  return { hard: hard.sort((a, b) => b - a), belay: line.start === 'stance' ? 0 : null }
+  return { hard: hard.sort((a, b) => b - a), belay: line.start === 'stance' ? 0 : null, feet }
 }
 
 /** One class milder. */
@@ -73,6 +78,7 @@ export function toConsequence(
   fall: { y: number; at: number; caughtAt: number | null; give: number },
 ): ConsequenceClass {
   const { y, at, give } = fall
+  const { feet } = terrain
   const from = y - feet
   const caughtAt = fall.caughtAt ?? terrain.belay
   const rest = caughtAt === null ? Number.NEGATIVE_INFINITY : restsAt(caughtAt, y, give)
@@ -85,8 +91,9 @@ export function toConsequence(
 
 /** What a cut rope, which nothing catches, leads to from a tie-in at `y`; free air below counts as the ground. */
 export function toUncaught(terrain: Terrain, y: number): ConsequenceClass {
-  const hit = meets(terrain, y - feet, Number.NEGATIVE_INFINITY)
-  return hit === null ? 'ground' : onHard(y - feet - hit)
+  const from = y - terrain.feet
+  const hit = meets(terrain, from, Number.NEGATIVE_INFINITY)
+  return hit === null ? 'ground' : onHard(from - hit)
 }
 
 /** What the failure of a lower-off or belay leads to, `height` metres up: the ground from 3 m, by the fall's length below. */
@@ -128,7 +135,7 @@ function toZone(terrain: Terrain, y: number, held: number | undefined, next: num
   const lands = (catching: number | undefined) => {
     const at = catching ?? terrain.belay
     const rest = at === null ? Number.NEGATIVE_INFINITY : restsAt(at, y, usualGive(y))
-    return meets(terrain, y - feet, rest - feet) !== null
+    return meets(terrain, y - terrain.feet, rest - terrain.feet) !== null
   }
   if (lands(held)) return 'anyway' as const
   return lands(next) ? ('hatched' as const) : null

@@ -14,7 +14,7 @@ export function toCuts(inputs: RatingInputs, picker: Picker): Record<Consequence
   if (isStation(inputs)) expected[toStationClass(inputs)] = hangs * toCutPerLowering(edge, picker)
   else {
     const hang = { median: picker.pick('load.lowering'), zeta: picker.pick('load.lowering.zeta') }
-    expected[toUncaughtHang(inputs)] += hangs * toCutPerFall(edge, hang, picker)
+    expected[toUncaughtHang(inputs, picker)] += hangs * toCutPerFall(edge, hang, picker)
     for (const { consequence, share, load } of picker.step('uncaught', () => toUncaughtLoads(inputs, picker)))
       expected[consequence] += falls * share * toCutPerFall(edge, load, picker)
   }

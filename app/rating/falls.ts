@@ -124,7 +124,7 @@ const draw = (inputs: RatingInputs, picker: Picker) => picker.step('draws', () =
  * and belay as they vary; by what they would lead to if the bolt failed. Shares adding up to 1.
  */
 export function toFallLoads(inputs: RatingInputs, picker: Picker): ClassedLoad[] {
-  const terrain = toTerrain(inputs.climb)
+  const terrain = toTerrain(inputs.climb, picker.pick('feet'))
   const at = inputs.climb.points[inputs.at]!.alongM
   const all = new Sums()
   for (const { at: caughtAt, share } of listCatches(inputs.climb, inputs.at, picker))
@@ -139,7 +139,7 @@ export function toFallLoads(inputs: RatingInputs, picker: Picker): ClassedLoad[]
 
 /** The same falls by what they would lead to if the rope were cut: nothing catches. */
 export function toUncaughtLoads(inputs: RatingInputs, picker: Picker): ClassedLoad[] {
-  const terrain = toTerrain(inputs.climb)
+  const terrain = toTerrain(inputs.climb, picker.pick('feet'))
   return classify(draw(inputs, picker), y => toUncaught(terrain, y)).toLoads()
 }
 
@@ -152,7 +152,7 @@ export function toHangShares(
   picker: Picker,
 ): { consequence: ConsequenceClass; share: number }[] {
   const { climb, at: index } = inputs
-  const terrain = toTerrain(climb)
+  const terrain = toTerrain(climb, picker.pick('feet'))
   const at = climb.points[index]!.alongM
   const fall = { y: at - hanging, at, give: picker.pick('slack') + hanging }
   return listCatches(climb, index, picker).map(({ at: caughtAt, share }) => ({
@@ -162,6 +162,6 @@ export function toHangShares(
 }
 
 /** What a rope cut while somebody hangs on the point leads to. */
-export function toUncaughtHang({ climb, at }: RatingInputs): ConsequenceClass {
-  return toUncaught(toTerrain(climb), climb.points[at]!.alongM - hanging)
+export function toUncaughtHang({ climb, at }: RatingInputs, picker: Picker): ConsequenceClass {
+  return toUncaught(toTerrain(climb, picker.pick('feet')), climb.points[at]!.alongM - hanging)
 }

@@ -27,7 +27,7 @@ interface Step {
   asked: ReadonlySet<string>
 }
 
-/** A picker over a model with every number central. */
+/** A picker over a model with every number central; its steps are remembered, so each set of inputs needs one of its own. */
 export function createPicker(model: RatingModel): Picker {
   return toPicker(model, null, new Map())
 }

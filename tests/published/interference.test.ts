@@ -21,6 +21,12 @@ describe('Interference of load and strength', () => {
     expect(1 - failNormal({ mean: 30_000, sd: 3000 }, { mean: 40_000, sd: 4000 })).toBeCloseTo(0.97725, 5)
   })
 
+  // the same book's design: tensile 35 000 ± 4000 less residual 10 000 ± 1500, strength 50 000 ± 6840 psi, R = 0.999
+  it('gives the textbook reliability of a strength chosen for 0.999', () => {
+    const stress = { mean: 25_000, sd: Math.hypot(4000, 1500) }
+    expect(1 - failNormal(stress, { mean: 50_000, sd: 6840 })).toBeCloseTo(0.999, 4)
+  })
+
   // P. O'Connor, Practical Reliability Engineering: β = 2.65165, R = 0.995995
   it('gives the textbook reliability of 5000 ± 400 against 3500 ± 400', () => {
     expect(1 - failNormal({ mean: 3500, sd: 400 }, { mean: 5000, sd: 400 })).toBeCloseTo(0.995995, 6)
@@ -40,6 +46,7 @@ describe('Interference of load and strength', () => {
   it('gives the closed forms of exponentials and Weibulls', () => {
     expect(1 - failExponential(50, 200)).toBeCloseTo(0.8, 12)
     expect(1 - failWeibull(40, 100, 2)).toBeCloseTo(0.862069, 6)
+    expect(1 - failWeibull(40, 100, 3)).toBeCloseTo(0.93985, 6)
   })
 
   // closed form: β = 3.09985, P = 9.68098e-4
