@@ -40,13 +40,16 @@ export function UrgencyWords({ judgement, name }: { judgement: Judgement; name: 
         {spread > 1.5 &&
           ` Not sure yet: between ${formatTwoDigits(judgement.timesLow)} and ${formatTwoDigits(judgement.timesHigh)} times.`}
       </p>
-      {judgement.deciding === 'breaks' && judgement.load !== null && judgement.strength.length > 0 && (
-        <OverlapChart
-          load={judgement.load}
-          strength={judgement.strength}
-          loadWords={`load on ${name.toLowerCase()}`}
-        />
-      )}
+      {judgement.deciding !== 'cuts_rope' &&
+        judgement.deciding !== 'releases_rope' &&
+        judgement.load !== null &&
+        judgement.strength.length > 0 && (
+          <OverlapChart
+            load={judgement.load}
+            strength={judgement.strength}
+            loadWords={`load on ${name.toLowerCase()}`}
+          />
+        )}
       <table className="ruled mt-2">
         <thead>
           <tr>
