@@ -102,20 +102,22 @@ function Row({ row }: { row: DangerRow }) {
         />
       </td>
       <td data-label="Urgency">
-        {row.band !== null && row.bandHigh !== null ? (
-          <Urgency band={row.band} bandHigh={row.bandHigh} small />
-        ) : (
-          <span className="text-stone">not rated</span>
-        )}
+        <span>
+          {row.band !== null && row.bandHigh !== null ? (
+            <Urgency band={row.band} bandHigh={row.bandHigh} small />
+          ) : (
+            <span className="text-stone">not rated</span>
+          )}
+        </span>
       </td>
       <td data-label="Danger, × a usual one">
         {row.danger === null ? (
           <span className="text-stone">none</span>
         ) : (
-          <>
+          <span>
             {formatTwoDigits(row.danger.times)}{' '}
             <span className="text-stone">{`${formatTwoDigits(row.danger.low)} to ${formatTwoDigits(row.danger.high)}`}</span>
-          </>
+          </span>
         )}
       </td>
       <td data-label="Seen by" className="text-stone">
