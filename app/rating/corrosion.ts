@@ -27,21 +27,30 @@ function toCorrosivity(place: RatingInputs['place']): Corrosivity {
   return place.seaKm <= 0.5 ? 'C5' : place.seaKm <= 5 ? 'C4' : 'C3'
 }
 
-/** Plated or self-drilled bolts are rarely younger where nobody knows their age. */
+/** Self-drilled bolts are rarely younger where nobody knows their age. */
 const unknownYears = 25
 
 /** The share of a 10 mm bolt's section that a uniform loss in µm takes, all round. */
 const toSectionShare = (loss: number) => 1 - Math.max(0, 1 - loss / 5000) ** 2
 
+/** The age to reckon with: of a self-drilled bolt an old one where nobody knows, of others only what is known. */
+function toRustingYears(part: PartInput): number | null {
+  const isDrilled = part.kind === 'self_drilled' || part.kind === 'drive_in'
+  if (isDrilled && (part.material === 'unknown' || part.material === 'steel'))
+    return part.ageYears ?? unknownYears
+  if (part.material !== 'plated_steel') return null
+  return isDrilled ? (part.ageYears ?? unknownYears) : part.ageYears
+}
+
 /**
- * The rust grade to reckon with on plated steel that nobody looked at, from place and age: 5 where a fifth of a 10 mm
- * bolt's section is expected to be gone, 4 from a tenth, null below and for other metals. Thresholds are a judgement.
+ * The rust grade to reckon with on plated steel that nobody has found sound, from place and age: 5 where a fifth of a
+ * 10 mm bolt's section is expected to be gone, 4 from a tenth, null below and for other metals. Thresholds are a judgement.
  */
 export function toExpectedRust(part: PartInput, place: RatingInputs['place']): 4 | 5 | null {
-  const drilled = part.kind === 'self_drilled' || part.kind === 'drive_in'
-  if (part.material !== 'plated_steel' && !(drilled && part.material === 'unknown')) return null
+  const years = toRustingYears(part)
+  if (years === null) return null
   const steel = firstYearLoss.steel[toCorrosivity(place)]
-  const gone = toSectionShare(toUniformLoss(steel, part.ageYears ?? unknownYears, corrosionExponents.steel))
+  const gone = toSectionShare(toUniformLoss(steel, years, corrosionExponents.steel))
   if (gone >= 1 / 5) return 5
   return gone >= 1 / 10 ? 4 : null
 }

@@ -1,14 +1,14 @@
-import type { PartKind } from '~/crags/part'
 import { type Band, bandOf, moreUrgent } from './band'
 import { type ConsequenceClass, consequenceClasses, consequenceWeights } from './consequence'
 import { toDrawnLoad, toDrawnStrength } from './drawing'
 import { type Evaluation, evaluate, toBreakRate, toByClass, toRate } from './evaluate'
 import { listFloors } from './floors'
-import type { FindingInput, PartInput, RatingInputs } from './inputs'
+import type { PartInput, RatingInputs } from './inputs'
 import type { RatingModel } from './model'
 import { createPicker, type Picker } from './picker'
+import { moveEach, toLookNext, toReasons } from './reasons'
+import { toUsual, withSomePart } from './usual'
 import { inRock } from './weights'
-import { toReason } from './words'
 
 /** Changes whenever the same inputs and model may give another result. */
 export const engineVersion = '1.1'
@@ -27,7 +27,7 @@ export interface Rating {
   rate: number
   rateLow: number
   rateHigh: number
-  /** R of a usual one of its kind in the same place, sound and known good; `times` is danger against that */
+  /** R of a usual one of its kind in the same place, in ordinary service; `times` is danger against that */
   usual: number
   times: number
   timesLow: number
@@ -42,43 +42,6 @@ export interface Rating {
   floors: string[]
   load: { medianKn: number; zeta: number } | null
   strength: { weight: number; medianKn: number; zeta: number }[]
-}
-
-interface Moved {
-  name: string
-  low: number
-  high: number
-}
-
-/** R with each ranged number in turn at its two ends, all others central. */
-function moveEach(inputs: RatingInputs, picker: Picker): Moved[] {
-  return picker.ranged().map(name => {
-    const ends = [picker.hold(name, 'low'), picker.hold(name, 'high')].map(
-      held => evaluate(inputs, held).rate,
-    )
-    return { name, low: Math.min(...ends), high: Math.max(...ends) }
-  })
-}
-
-const usualKind: Partial<Record<PartKind, PartKind>> = { self_drilled: 'wedge_bolt', drive_in: 'wedge_bolt' }
-const seenGood: FindingInput = {
-  kind: 'no_fault',
-  low: null,
-  high: null,
-  unit: null,
-  edge: null,
-  triedByHand: null,
-}
-
-/** A usual one of its kind: the same place, with the same kinds of part, of metal that does not crack, found sound. */
-function toUsual(inputs: RatingInputs): RatingInputs {
-  const parts: PartInput[] = inputs.parts.map(part => ({
-    ...part,
-    kind: usualKind[part.kind] ?? part.kind,
-    findings: [seenGood],
-  }))
-  const otherSide = inputs.otherSide === null ? null : ('looked_at' as const)
-  return { ...inputs, parts, otherSide, place: { ...inputs.place, warmSea: false } }
 }
 
 /** The largest by a measure. */
@@ -101,18 +64,6 @@ function toDeciding(inputs: RatingInputs, { breaks, cuts, releases }: Evaluation
   return most(ways, way => rates[way])
 }
 
-/** Numbers that say the same in words are one reason: the strongest of them. */
-function toReasons(moved: Moved[], inputs: RatingInputs) {
-  const { kind } = inputs.climb.points[inputs.at]!
-  const strongest = [...moved].sort((a, b) => b.high / b.low - a.high / a.low)
-  const said = new Map<string, { name: string; words: string; times: number; look?: string }>()
-  for (const { name, low, high } of strongest) {
-    const { words, look } = toReason(name, kind)
-    if (!said.has(words)) said.set(words, { name, words, times: high / low, look })
-  }
-  return [...said.values()].filter(({ times }) => times > 1.005)
-}
-
 const atLeast = (band: Band, floors: string[]) => (floors.length > 0 ? moreUrgent(band, 'turn') : band)
 
 /** Danger against a usual one; 1 where neither can happen. */
@@ -122,10 +73,11 @@ const timesOf = (rate: number, usual: number) => (usual > 0 ? rate / usual : rat
  * The urgency of a fixed point: R with every number central; low and high as the lowest and highest R with one number
  * at an end of its range; bands, floors, reasons and the next best look. Never throws for scant inputs.
  */
-export function rate(inputs: RatingInputs, model: RatingModel): Rating {
+export function rate(given: RatingInputs, model: RatingModel): Rating {
+  const inputs = withSomePart(given)
   const picker = createPicker(model)
   const central = evaluate(inputs, picker)
-  const moved = moveEach(inputs, picker).filter(({ low }) => low > 0)
+  const moved = moveEach(inputs, picker)
   const rateLow = Math.min(central.rate, ...moved.map(({ low }) => low))
   const rateHigh = Math.max(central.rate, ...moved.map(({ high }) => high))
   const usual = evaluate(toUsual(inputs), createPicker(model)).rate
@@ -148,7 +100,7 @@ export function rate(inputs: RatingInputs, model: RatingModel): Rating {
     byClass,
     deciding: toDeciding(inputs, central, picker),
     reasons: reasons.slice(0, 3).map(({ name, words, times }) => ({ name, words, times })),
-    lookNext: reasons.find(({ look }) => look !== undefined)?.look ?? null,
+    lookNext: toLookNext(reasons),
     floors,
     load: load && { medianKn: load.median, zeta: load.zeta },
     strength: toDrawnStrength(inputs, picker).map(({ weight, median, zeta }) => ({

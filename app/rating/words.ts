@@ -1,14 +1,20 @@
 import { type AnchorKind, anchorKindWords } from '~/crags/anchor'
 
-interface Said {
+export interface Said {
   /** what moves the figure, as a coordinator would say it */
   words: string
   /** the look or measure that would settle it, where there is one */
   look?: string
+  /** the look seldom settles it: only when there is no better one */
+  seldom?: true
 }
 
 const weights: Record<string, Said> = {
-  unknown_age: { words: 'Age and maker not known', look: 'look for a maker’s mark and the fitting date' },
+  unknown_age: {
+    words: 'Age and maker not known',
+    look: 'look for a maker’s mark and the fitting date',
+    seldom: true,
+  },
   old_plated: { words: 'How far rust has gone inside', look: 'look at the shank where it enters the rock' },
   self_drilled: {
     words: 'How short and how rusty the self-drilled sleeve is',
@@ -114,7 +120,7 @@ export function toReason(name: string, kind: AnchorKind): Said {
     case 'falls':
       return { words: `How often people fall on this ${point}` }
     case 'ascents':
-      return { words: 'How much the route is climbed', look: 'count ascents on a few days' }
+      return { words: 'How much the route is climbed', look: 'count ascents on a few days', seldom: true }
     case 'strength':
       return { words: 'How strong parts of this kind and condition are' }
     case 'common':

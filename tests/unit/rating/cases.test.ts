@@ -346,6 +346,22 @@ describe('The rating of what people really report', () => {
     expect(got.lookNext).toBe('a spanner on the nut, five minutes')
   })
 
+  it('is Mend soon and could be Mend first for a loose nut on the story’s bolt 3, which a spanner settles', () => {
+    const parts = [
+      part('wedge_bolt', [found('nut_loose')], { material: 'plated_steel', sizeMm: 10 }),
+      part('hanger', [found('spins')], { material: 'plated_steel' }),
+    ]
+    const got = rated({ ...slackWater, at: 2, parts })
+    expect(got).toMatchObject({ band: 'soon', bandHigh: 'first', worst: 'ground', deciding: 'pulls_out' })
+    expect(got.lookNext).toBe('a spanner on the nut, five minutes')
+    expect(got.reasons.map(({ words }) => words)).toContain('Age and maker not known')
+  })
+
+  it('is never harmless for a point of which nothing at all is on record', () => {
+    expect(rated(at(2, []))).toMatchObject({ band: 'turn', bandHigh: 'first' })
+    expect(rated({ ...slackWater, parts: [] }).band).toBe('soon')
+  })
+
   it('holds a point by the sea whose stainless steel may crack unseen at In turn or above', () => {
     const got = rated(at(8, glue(sound), { sea: true, traffic: 'quiet' }))
     expect(got.floors).toEqual(['stainless steel by a warm sea may crack unseen'])
