@@ -28,7 +28,7 @@ interface Catch {
 const positions = 12
 
 /** Below this share a fall past all that has failed counts as caught by nothing. */
-const mattering = 1e-15
+const mattering = 1e-12
 
 /** Which points below catch after the one at `index` has failed, each with its own condition. Shares add up to 1. */
 function listCatches(line: RatedLine, index: number, picker: Picker): Catch[] {

@@ -1,5 +1,5 @@
 import type { Lognormal } from './lognormal'
-import { gridStep, loadGrid, tableOf } from './tables'
+import { densityOf, gridStep, loadGrid, tailsOf } from './tables'
 
 /** A stream of events in a year: how many, and the load of each (kN). */
 export interface Stream {
@@ -13,13 +13,17 @@ export interface Stream {
  */
 export function toYearlyLargest(streams: readonly Stream[]): Float64Array {
   const weights = new Float64Array(loadGrid.length)
-  const tables = streams.map(({ rate, load }) => ({ rate, table: tableOf(load) }))
+  const tables = streams.map(({ rate, load }) => ({
+    rate,
+    above: tailsOf(load).above,
+    dense: densityOf(load),
+  }))
   for (let i = 0; i < weights.length; i++) {
     let exceed = 0
     let density = 0
-    for (const { rate, table } of tables) {
-      exceed += rate * table.above[i]!
-      density += rate * table.density[i]!
+    for (const { rate, above, dense } of tables) {
+      exceed += rate * above[i]!
+      density += rate * dense[i]!
     }
     weights[i] = density === 0 ? 0 : density * Math.exp(-exceed) * gridStep
   }
