@@ -36,7 +36,13 @@ export function LineChooser(props: { lengthM: number; points: DrawnPoint[]; grou
         aria-label="The line of the route"
         role="group"
       >
-        <LineScene scale={scale} centre={centre} rock={rock} assumed={points.some(point => point.assumed)} />
+        <LineScene
+          id="chooser"
+          scale={scale}
+          centre={centre}
+          rock={rock}
+          assumed={points.some(point => point.assumed)}
+        />
         <path
           d={`M${centre} ${toY(scale, 0)}V${toY(scale, lengthM)}`}
           stroke="var(--slate)"

@@ -8,7 +8,7 @@ interface Place {
 }
 
 /** The rock behind a line, and its scale: a tick each metre, a figure each five. */
-export function LineScene({ scale, centre, rock, assumed }: Place & { assumed: boolean }) {
+export function LineScene({ scale, centre, rock, assumed, id }: Place & { assumed: boolean; id: string }) {
   const left = centre - rock / 2
   const right = centre + rock / 2
   const top = toY(scale, scale.lengthM)
@@ -18,10 +18,16 @@ export function LineScene({ scale, centre, rock, assumed }: Place & { assumed: b
   return (
     <>
       <defs>
-        <pattern id="hatch" width="7" height="7" patternUnits="userSpaceOnUse" patternTransform="rotate(45)">
+        <pattern
+          id={`hatch-${id}`}
+          width="7"
+          height="7"
+          patternUnits="userSpaceOnUse"
+          patternTransform="rotate(45)"
+        >
           <path d="M0 0v7" stroke="var(--oxide)" strokeWidth="1.5" />
         </pattern>
-        <pattern id="anyway" width="6" height="6" patternUnits="userSpaceOnUse">
+        <pattern id={`anyway-${id}`} width="6" height="6" patternUnits="userSpaceOnUse">
           <circle cx="3" cy="3" r="1" fill="var(--oxide)" />
         </pattern>
       </defs>
@@ -72,61 +78,69 @@ export function Ground(props: { ground: Below; scale: LineScale; from: number; t
   )
 }
 
-interface Zone {
+export interface Zone {
   fromM: number
   toM: number
   kind: 'hatched' | 'anyway'
 }
 
-const sentences = {
-  hatched: 'a fall from here reaches the ground if the bolt below fails',
-  anyway: 'reaches the ground anyway',
+/** What each kind of stretch means, said in place or below the drawing. */
+export function toZoneWords(kind: Zone['kind'], ledges: boolean): string {
+  const hard = ledges ? 'the ground or a ledge' : 'the ground'
+  return kind === 'hatched'
+    ? `a fall from here reaches ${hard} if the bolt below fails`
+    : `reaches ${hard} anyway`
 }
 
-/** The stretches from which a fall reaches the ground, each kind said once in a gap between the labels. */
-export function Zones(props: Place & { zones: Zone[]; labels: number[]; width: number }) {
+const fills = { hatched: 'hatch', anyway: 'anyway' }
+
+/** The stretches from which a fall reaches the ground. */
+export function Zones({ zones, scale, centre, rock, id }: Place & { zones: Zone[]; id: string }) {
+  return zones.map(zone => (
+    <rect
+      key={`${zone.kind}${zone.fromM}`}
+      x={centre - rock / 2}
+      y={toY(scale, zone.toM)}
+      width={rock}
+      height={(zone.toM - zone.fromM) * scale.perMetre}
+      fill={`url(#${fills[zone.kind]}-${id})`}
+    />
+  ))
+}
+
+/** Each kind of stretch said once, in a gap between the labels that is its own; what finds no gap is left to the caption. */
+export function ZoneSentences(props: Place & { zones: Zone[]; labels: number[]; ledges: boolean }) {
   const { zones, scale, centre, rock, labels } = props
-  const said = (['hatched', 'anyway'] as const).flatMap(kind => {
+  const taken: number[] = []
+  return (['hatched', 'anyway'] as const).map(kind => {
     const zone = zones.find(one => one.kind === kind)
-    if (zone === undefined) return []
-    const y = findGap((toY(scale, zone.fromM) + toY(scale, zone.toM)) / 2, labels, scale)
-    return [{ kind, y }]
+    if (zone === undefined) return null
+    const y = findGap((toY(scale, zone.fromM) + toY(scale, zone.toM)) / 2, labels, scale, taken)
+    if (y === null) return null
+    taken.push(y)
+    return (
+      <text
+        key={kind}
+        x={centre + rock / 2 + 24}
+        y={y + 4.5}
+        fontSize={13}
+        fontWeight={kind === 'hatched' ? 500 : 400}
+        fill={kind === 'hatched' ? 'var(--oxide)' : 'var(--stone)'}
+      >
+        {toZoneWords(kind, props.ledges)}
+      </text>
+    )
   })
-  return (
-    <>
-      {zones.map(zone => (
-        <rect
-          key={`${zone.kind}${zone.fromM}`}
-          x={centre - rock / 2}
-          y={toY(scale, zone.toM)}
-          width={rock}
-          height={(zone.toM - zone.fromM) * scale.perMetre}
-          fill={zone.kind === 'hatched' ? 'url(#hatch)' : 'url(#anyway)'}
-        />
-      ))}
-      {said.map(({ kind, y }) => (
-        <text
-          key={kind}
-          x={centre + rock / 2 + 24}
-          y={y + 4.5}
-          fontSize={13}
-          fontWeight={kind === 'hatched' ? 500 : 400}
-          fill={kind === 'hatched' ? 'var(--oxide)' : 'var(--stone)'}
-        >
-          {sentences[kind]}
-        </text>
-      ))}
-    </>
-  )
 }
 
-/** The middle of the gap between labels that lies nearest, at least 24 pixels from either. */
-function findGap(wanted: number, labels: number[], scale: LineScale): number {
+/** The middle of the nearest gap between labels that is wide enough and not taken, or null. */
+function findGap(wanted: number, labels: number[], scale: LineScale, taken: number[]): number | null {
   const edges = [scale.base + 8, ...labels, 0]
   const gaps = edges.slice(1).flatMap((upper, index) => {
     const lower = edges[index]!
-    return lower - upper >= 36 ? [(lower + upper) / 2] : []
+    const middle = (lower + upper) / 2
+    return lower - upper >= 36 && !taken.includes(middle) ? [middle] : []
   })
-  if (gaps.length === 0) return scale.base + 17
+  if (gaps.length === 0) return null
   return gaps.reduce((best, gap) => (Math.abs(gap - wanted) < Math.abs(best - wanted) ? gap : best))
 }

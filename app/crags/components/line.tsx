@@ -4,7 +4,7 @@ import type { ConditionState } from '../condition-state'
 import { conditionShort } from '../condition-state'
 import { type LineScale, spreadLabels, toY } from '../line-layout'
 import { MarkAt } from './condition-mark'
-import { Ground, LineScene, Zones } from './line-scene'
+import { Ground, LineScene, toZoneWords, type Zone, ZoneSentences, Zones } from './line-scene'
 
 /** A fixed point as the line draws it. */
 export interface DrawnPoint {
@@ -19,12 +19,6 @@ export interface DrawnPoint {
   open: boolean
 }
 
-export interface Zone {
-  fromM: number
-  toM: number
-  kind: 'hatched' | 'anyway'
-}
-
 interface Props {
   lengthM: number
   points: DrawnPoint[]
@@ -35,51 +29,97 @@ interface Props {
   href(code: string): string
 }
 
-const width = 580
-const centre = 118
-const rock = 64
+/** The two sizes of the drawing, in its own pixels: the page's row holds all words, the phone's has them below the name. */
+const layouts = {
+  page: {
+    id: 'page',
+    width: 580,
+    centre: 118,
+    rock: 64,
+    gap: 27,
+    metre: 34,
+    point: 46,
+    name: 15,
+    className: 'hidden sm:block',
+  },
+  phone: {
+    id: 'phone',
+    width: 358,
+    centre: 104,
+    rock: 44,
+    gap: 46,
+    metre: 30,
+    point: 56,
+    name: 16,
+    className: 'sm:hidden',
+  },
+} as const
+type Layout = (typeof layouts)[keyof typeof layouts]
 
 /**
  * A pitch as a line to scale: its fixed points where they are with what they are and when they were last seen, the
  * stretches from which a fall reaches the ground, ledges and what is below. Every point leads to its own part of the
- * page; the same stands as a list for those who hear it.
+ * page.
  */
 export function Line(props: Props) {
-  const { lengthM, points, zones, ledges, selected } = props
-  const height = Math.max(360, Math.min(1100, 60 + Math.max(lengthM * 34, points.length * 46)))
+  const assumed = props.points.some(point => point.assumed)
+  return (
+    <figure>
+      <DrawnLine {...props} assumed={assumed} layout={layouts.page} />
+      <DrawnLine {...props} assumed={assumed} layout={layouts.phone} />
+      <figcaption className="mt-1 text-s text-stone">
+        {(['hatched', 'anyway'] as const).map(
+          kind =>
+            props.zones.some(zone => zone.kind === kind) && (
+              <p key={kind} className="sm:hidden">
+                {`${kind === 'hatched' ? 'Hatched' : 'Dotted'}: ${toZoneWords(kind, props.ledges.length > 0)}.`}
+              </p>
+            ),
+        )}
+        {assumed && <p>Grey: nobody has measured the spacing here; it is assumed.</p>}
+      </figcaption>
+    </figure>
+  )
+}
+
+function DrawnLine(props: Props & { assumed: boolean; layout: Layout }) {
+  const { lengthM, points, zones, ledges, selected, assumed, layout } = props
+  const { width, centre, rock, gap } = layout
+  const wanted = Math.max(lengthM * layout.metre, points.length * layout.point)
+  const height = Math.max(360, Math.min(1200, 60 + wanted))
   const scale: LineScale = { lengthM, base: height - 40, perMetre: (height - 76) / Math.max(lengthM, 1) }
   const labels = spreadLabels(
     points.map(point => toY(scale, point.alongM)),
-    { gap: 27, top: 20, bottom: scale.base - 14 },
+    { gap, top: 20, bottom: scale.base - 14 },
   )
-  const assumed = points.some(point => point.assumed)
   return (
-    <figure>
+    <>
       {/* biome-ignore lint/a11y/useSemanticElements: an SVG has no element for a group of links */}
       <svg
         viewBox={`0 0 ${width} ${height}`}
-        className="block h-auto w-full max-w-[580px]"
+        className={`h-auto w-full max-w-[580px] ${layout.className}`}
         role="group"
         aria-label="The line of the route"
       >
-        <LineScene scale={scale} centre={centre} rock={rock} assumed={assumed} />
-        <Zones zones={zones} scale={scale} centre={centre} rock={rock} labels={labels} width={width} />
+        <LineScene scale={scale} centre={centre} rock={rock} assumed={assumed} id={layout.id} />
+        <Zones zones={zones} scale={scale} centre={centre} rock={rock} id={layout.id} />
+        {layout.id === 'page' && (
+          <ZoneSentences
+            zones={zones}
+            scale={scale}
+            centre={centre}
+            rock={rock}
+            labels={labels}
+            ledges={ledges.length > 0}
+          />
+        )}
         <path
           d={`M${centre} ${toY(scale, 0)}V${toY(scale, lengthM)}`}
           stroke={assumed ? 'var(--stone)' : 'var(--slate)'}
           strokeWidth={2.5}
         />
         {ledges.map(ledge => (
-          <g key={ledge.atM}>
-            <path
-              d={`M${centre - rock / 2 - 6} ${toY(scale, ledge.atM)}h${rock + 24}`}
-              stroke="var(--slate)"
-              strokeWidth={3}
-            />
-            <text x={centre + rock / 2 + 24} y={toY(scale, ledge.atM) - 5} fontSize={13} fill="var(--stone)">
-              {`ledge at ${ledge.atM} m`}
-            </text>
-          </g>
+          <Ledge key={ledge.atM} atM={ledge.atM} y={toY(scale, ledge.atM)} layout={layout} />
         ))}
         <Ground ground={props.ground} scale={scale} from={centre - rock / 2 - 20} to={width - 4} />
         {points.map((point, index) => (
@@ -96,57 +136,108 @@ export function Line(props: Props) {
               y={toY(scale, point.alongM)}
               label={labels[index]!}
               selected={point.code === selected}
+              layout={layout}
             />
           </Link>
         ))}
       </svg>
-      {assumed && (
-        <figcaption className="mt-1 text-s text-stone">
-          Grey: nobody has measured the spacing here; it is assumed.
-        </figcaption>
-      )}
-    </figure>
+    </>
+  )
+}
+
+function Ledge({ atM, y, layout }: { atM: number; y: number; layout: Layout }) {
+  const { centre, rock } = layout
+  return (
+    <g>
+      <path d={`M${centre - rock / 2 - 6} ${y}h${rock + 24}`} stroke="var(--slate)" strokeWidth={3} />
+      <text x={centre + rock / 2 + 24} y={y - 5} fontSize={13} fill="var(--stone)">
+        {`ledge at ${atM} m`}
+      </text>
+    </g>
   )
 }
 
 const weights: Record<ConditionState, number> = { severe: 600, poor: 600, fair: 500, unknown: 500, good: 400 }
 
-function Point({
-  point,
-  y,
-  label,
-  selected,
-}: {
+interface PlacedPoint {
   point: DrawnPoint
   y: number
   label: number
   selected: boolean
-}) {
+  layout: Layout
+}
+
+function Point({ point, y, label, selected, layout }: PlacedPoint) {
+  const { width, centre, rock, gap } = layout
   const lowerOff = point.kind === 'lower_off'
   const size = lowerOff ? 22 : 18
   const edge = centre + rock / 2
   return (
     <g>
-      <rect x={edge + 18} y={label - 13} width={width - edge - 18} height={26} fill="transparent" />
+      <rect x={edge + 8} y={label - gap / 2} width={width - edge - 8} height={gap} fill="transparent" />
       <circle cx={centre} cy={y} r={size / 2 + 3} fill="var(--chalk)" />
       <MarkAt state={point.state} x={centre} y={y} size={size} />
       {lowerOff && (
         <path d={`M${centre - 10} ${y + size / 2 + 5}h20`} stroke="var(--slate)" strokeWidth={2.5} />
       )}
-      <path d={`M${edge + 4} ${y}L${edge + 18} ${label}`} stroke="var(--stone)" opacity={0.5} fill="none" />
+      <path
+        d={
+          layout.id === 'phone'
+            ? `M${edge + 2} ${y}L${edge + 9} ${label}`
+            : `M${edge + 4} ${y}L${edge + 18} ${label}`
+        }
+        stroke="var(--stone)"
+        opacity={0.5}
+        fill="none"
+      />
       {selected && <Ticks x={centre} y={y} reach={size / 2 + 7} />}
-      <text x={edge + 24} y={label + 5} fontSize={15} fontWeight={weights[point.state]} fill="var(--slate)">
+      {layout.id === 'phone' ? (
+        <PhoneWords point={point} x={edge + 14} label={label} />
+      ) : (
+        <PageWords point={point} x={edge + 24} label={label} right={width - 4} />
+      )}
+    </g>
+  )
+}
+
+function PageWords({
+  point,
+  x,
+  label,
+  right,
+}: {
+  point: DrawnPoint
+  x: number
+  label: number
+  right: number
+}) {
+  return (
+    <>
+      <text x={x} y={label + 5} fontSize={15} fontWeight={weights[point.state]} fill="var(--slate)">
         {point.name}
       </text>
-      <text x={edge + 108} y={label + 5} fontSize={14} fill="var(--stone)">
+      <text x={x + 84} y={label + 5} fontSize={14} fill="var(--stone)">
         {shorten(point.what, point.seen === null ? 52 : 25)}
       </text>
       {point.seen && (
-        <text x={width - 4} y={label + 5} textAnchor="end" fontSize={13} fill="var(--stone)">
+        <text x={right} y={label + 5} textAnchor="end" fontSize={13} fill="var(--stone)">
           {point.seen}
         </text>
       )}
-    </g>
+    </>
+  )
+}
+
+function PhoneWords({ point, x, label }: { point: DrawnPoint; x: number; label: number }) {
+  return (
+    <>
+      <text x={x} y={label - 2} fontSize={16} fontWeight={weights[point.state]} fill="var(--slate)">
+        {point.name}
+      </text>
+      <text x={x} y={label + 15} fontSize={14} fill="var(--stone)">
+        {shorten(point.what, 30)}
+      </text>
+    </>
   )
 }
 
