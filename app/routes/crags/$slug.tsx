@@ -4,7 +4,7 @@ import { ConditionMark } from '~/crags/components/condition-mark'
 import { Strip } from '~/crags/components/strip'
 import { conditionShort } from '~/crags/condition-state'
 import { trafficWords } from '~/crags/crag'
-import { findConsent, findCrag } from '~/crags/crags.server'
+import { findConsent, findCrag, requireCragSubject } from '~/crags/crags.server'
 import { listNearby } from '~/crags/nearby.server'
 import { formatGear, formatOpen, formatWorst } from '~/crags/place-words'
 import { parseSlug, toSlug } from '~/lib/code'
@@ -12,6 +12,7 @@ import { toDay } from '~/lib/dates'
 import { groupBy } from '~/lib/group-by'
 import { NoticeBands } from '~/notices/components/notice-bands'
 import { noticesInForce } from '~/notices/notices.server'
+import { can } from '~/people/viewer'
 import { viewerContext } from '~/people/viewer-context'
 import { ButtonLink } from '~/ui/button'
 import { Page } from '~/ui/page'
@@ -36,7 +37,11 @@ export async function loader({ params, context }: Route.LoaderArgs) {
   const climbs = await listClimbs(db, viewer, crag.id, toDay(now, crag.timeZone))
   return {
     crag,
-    consent: await findConsent(db, crag.id),
+    consent: crag.consent,
+    // what an owner asks is for those who work there
+    conditions: can(viewer, 'order:see', await requireCragSubject(db, crag.id))
+      ? ((await findConsent(db, crag.id))?.conditions ?? null)
+      : null,
     nearby: await listNearby(db, viewer, crag),
     notices: await noticesInForce(db, viewer, { now, cragId: crag.id }),
     sectors: [...groupBy(climbs, climb => climb.sectorName)].map(([name, list]) => ({ name, climbs: list })),
@@ -51,7 +56,7 @@ const consentWords = {
 }
 
 export default function Crag({ loaderData }: Route.ComponentProps) {
-  const { crag, consent, nearby, notices, sectors } = loaderData
+  const { crag, consent, conditions, nearby, notices, sectors } = loaderData
   return (
     <Page
       title={crag.name}
@@ -80,7 +85,7 @@ export default function Crag({ loaderData }: Route.ComponentProps) {
           </p>
           {crag.approach && <p className="mt-2">{crag.approach}</p>}
           {crag.policy && <p className="mt-2">{crag.policy}</p>}
-          {consent && <p className="mt-2">{`${consentWords[consent.state]} ${consent.conditions ?? ''}`}</p>}
+          <p className="mt-2">{[consentWords[consent], conditions].filter(Boolean).join(' ')}</p>
           {crag.warmSea && (
             <p className="mt-2">
               Stainless steel by a warm sea may crack unseen and fail under body weight; no look and no pull
