@@ -1,6 +1,7 @@
 import { and, asc, eq, isNull } from 'drizzle-orm'
 import type { Queryable } from '~/db/client.server'
-import { anchors, areas, climbAnchors, climbs, crags, parts, pitches } from '~/db/schema/crags'
+import { anchors, areas, climbAnchors, climbs, crags, pitches } from '~/db/schema/crags'
+import { parts } from '~/db/schema/parts'
 import type { Viewer } from '~/people/viewer'
 import { formatPosition } from './anchor'
 import { visibleCrags } from './visible.server'

@@ -1,16 +1,7 @@
 import { and, asc, eq, gt, inArray, isNull, or } from 'drizzle-orm'
 import type { Queryable } from '~/db/client.server'
-import {
-  anchors,
-  areas,
-  climbAnchors,
-  climbs,
-  crags,
-  ledges,
-  parts,
-  pitches,
-  sectors,
-} from '~/db/schema/crags'
+import { anchors, areas, climbAnchors, climbs, crags, ledges, pitches, sectors } from '~/db/schema/crags'
+import { parts } from '~/db/schema/parts'
 import type { Viewer } from '~/people/viewer'
 import { type AnchorKind, type Below, formatPosition } from './anchor'
 import type { ConditionState } from './condition-state'

@@ -9,10 +9,10 @@ import {
   cragOrganisations,
   crags,
   ledges,
-  parts,
   pitches,
   sectors,
 } from '~/db/schema/crags'
+import { parts } from '~/db/schema/parts'
 import { toCode } from '~/lib/code'
 import type { Remit } from '~/people/role'
 import type { Sensitivity } from '~/people/sensitivity'

@@ -1,6 +1,6 @@
 import { and, asc, eq, inArray, isNull } from 'drizzle-orm'
 import type { Queryable, Transaction } from '~/db/client.server'
-import { parts } from '~/db/schema/crags'
+import { parts } from '~/db/schema/parts'
 import { findings, reports } from '~/db/schema/reports'
 import type { Act } from '~/record/act'
 

@@ -5,8 +5,7 @@ import { expect, test } from './fresh-app'
 const assets = join(import.meta.dirname, '../../build/client/assets')
 const scripts = () => readdirSync(assets).filter(name => name.endsWith('.js'))
 
-test('No server code and no schema library reaches the browser', async ({ isMobile }) => {
-  test.skip(isMobile, 'the same bundle for every size')
+test('No server code and no schema library reaches the browser', async () => {
   for (const name of scripts()) {
     const text = readFileSync(join(assets, name), 'utf8')
     expect(text.includes('ZodError'), `zod in ${name}`).toBe(false)

@@ -16,7 +16,8 @@ import { failureModes, hazardStates } from '../../reports/hazard'
 import { photoStates } from '../../reports/photo'
 import { howSeen, reportStates } from '../../reports/report'
 import { day, moment, oneOf, stamps, uuid } from '../columns'
-import { anchors, climbs, crags, parts, sectors } from './crags'
+import { anchors, climbs, crags, sectors } from './crags'
+import { parts } from './parts'
 import { people } from './people'
 
 /** What the rating of a report or hazard left on it; the rating itself is a row of its own. */
