@@ -25,6 +25,7 @@ export default defineConfig({
     },
   },
   test: {
+    setupFiles: ['tests/console-errors.ts'],
     projects: [
       { extends: true, test: { name: 'unit', include: ['tests/unit/**/*.test.{ts,tsx}'] } },
       { extends: true, test: { name: 'published', include: ['tests/published/**/*.test.ts'] } },

@@ -16,7 +16,6 @@ import { isDatabaseAway } from './web/database-away'
 import { createLimits } from './web/limits.server'
 import { networkContext } from './web/network'
 import { hashNetwork } from './web/network.server'
-import { toPlainPage } from './web/plain-page'
 import { findNonce } from './web/security.server'
 import type { Settings } from './web/settings'
 
@@ -64,19 +63,14 @@ const nameBrowser: RequestHandler = (request, response, next) => {
 
 const ownerOf = (request: Known) => request.viewer?.sessionHash ?? request.viewer?.guestHash ?? null
 
-function limitUploads({ db, settings }: Given): RequestHandler {
+/** Why no more forms with photos are taken from here just now, or null; reports and work are counted apart. */
+function countForm({ db, settings }: Given): (request: Request) => Promise<string | null> {
   const limits = createLimits({ db, dbName: new URL(settings.databaseUrl).pathname.slice(1) })
-  return (request: Known, response, next) => {
-    if (request.method !== 'POST') return next()
+  return async (request: Known) => {
     const network = hashNetwork(request.ip, settings.appSecret)
-    limits.take('upload', { network, browser: ownerOf(request) }).then(answer => {
-      if (answer.ok) return next()
-      response
-        .status(429)
-        .set('Retry-After', String(answer.retryAfter))
-        .type('html')
-        .send(toPlainPage('Too many at once', [answer.reason]))
-    }, next)
+    const limited = request.path.startsWith('/report/') ? 'report' : 'upload'
+    const answer = await limits.take(limited, { network, browser: ownerOf(request) })
+    return answer.ok ? null : answer.reason
   }
 }
 
@@ -102,15 +96,20 @@ async function loadBuild(vite: ViteDevServer | undefined): Promise<ServerBuild> 
 export function toPages(given: Given): Router {
   const { db, clock, settings, vite } = given
   const pages = Router()
+  pages.use((_request, response, next) => {
+    // a page is made for who looks: kept for going back, asked for anew otherwise
+    response.set('Cache-Control', 'private, no-cache')
+    next()
+  })
   pages.use(knowViewer(given))
   pages.use(namedForms, nameBrowser)
   pages.post(
     photoForms,
-    limitUploads(given),
     takeUploads({
       photoDir: settings.photoDir,
       db,
       ownerOf,
+      countForm: countForm(given),
       toAct: (request: Known) =>
         toAct(clock(), {
           kind: request.viewer?.person ? 'person' : 'guest',

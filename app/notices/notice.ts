@@ -1,5 +1,6 @@
 import type { Move } from '~/lib/moves'
 import type { Action } from '~/people/permission'
+import { can, type Subject, type Viewer } from '~/people/viewer'
 
 export const noticeKinds = [
   'first_warning',
@@ -36,3 +37,14 @@ export const noticeMoves: readonly Move<NoticeState, Action>[] = [
   { from: 'draft', to: 'published', may: 'notice:manage' },
   { from: 'published', to: 'withdrawn', may: 'notice:manage' },
 ]
+
+/** Who may withdraw a notice: an access officer any, a coordinator a first warning of their own. */
+export function canWithdraw(
+  viewer: Viewer,
+  notice: { kind: NoticeKind; publishedBy: string | null },
+  subject: Subject,
+): boolean {
+  if (can(viewer, 'notice:manage', subject)) return true
+  const own = notice.publishedBy !== null && notice.publishedBy === viewer.person?.id
+  return notice.kind === 'first_warning' && own && can(viewer, 'warning:withdraw', subject)
+}

@@ -17,6 +17,7 @@ const columns = {
   decidedByWords: notices.decidedByWords,
   ground: notices.ground,
   reviewOn: notices.reviewOn,
+  publishedBy: notices.publishedBy,
   publishedAt: notices.publishedAt,
   confirmedAt: notices.confirmedAt,
   withdrawnAt: notices.withdrawnAt,
@@ -53,7 +54,8 @@ function selectNotices(db: Queryable) {
 }
 
 type NoticeRow = Awaited<ReturnType<ReturnType<typeof selectNotices>['limit']>>[number]
-export type ShownNotice = NoticeRow
+/** A notice as anybody may read it: whose organisation, never which person. */
+export type ShownNotice = Omit<NoticeRow, 'publishedBy'>
 
 /** Strongest first: what the law and the owner say, then please do not climb, hazards, first warnings, works. */
 const strength: readonly NoticeKind[] = [
@@ -65,7 +67,7 @@ const strength: readonly NoticeKind[] = [
   'works',
 ]
 
-const byStrength = (a: NoticeRow, b: NoticeRow) =>
+const byStrength = (a: ShownNotice, b: ShownNotice) =>
   strength.indexOf(a.kind) - strength.indexOf(b.kind) ||
   (b.publishedAt?.getTime() ?? 0) - (a.publishedAt?.getTime() ?? 0)
 
@@ -97,11 +99,12 @@ export async function noticesInForce(
     .where(and(isInForceAt(given.now), visibleCrags(viewer), atPlace(given)))
     .orderBy(asc(notices.id))
     .limit(200)
-  return [...new Map(rows.map(row => [row.id, row])).values()].sort(byStrength)
+  const once = new Map(rows.map(({ publishedBy: _, ...row }) => [row.id, row]))
+  return [...once.values()].sort(byStrength)
 }
 
 /** The notice of a code if the viewer may see its crag (drafts are nobody's here), else null. */
-export async function findNotice(db: Queryable, viewer: Viewer, code: string): Promise<ShownNotice | null> {
+export async function findNotice(db: Queryable, viewer: Viewer, code: string): Promise<NoticeRow | null> {
   const [row] = await selectNotices(db)
     .where(
       and(eq(notices.code, code), visibleCrags(viewer), inArray(notices.state, ['published', 'withdrawn'])),

@@ -27,6 +27,8 @@ interface Given {
   photoDir: string
   db: Database
   ownerOf: (request: Request) => string | null
+  /** counts the form; a sentence when too many came from here */
+  countForm: (request: Request) => Promise<string | null>
   toAct: (request: Request) => Act
 }
 
@@ -116,6 +118,13 @@ export function takeUploads(given: Given): RequestHandler {
     const uploads: Uploads = { formData: toFormData(request.body ?? {}), staged: [], refused: [] }
     if (error !== undefined && error !== null && !(error instanceof MulterError)) throw error
     if (error instanceof MulterError) uploads.refused.push(broken)
+    const tooOften = await given.countForm(request)
+    if (tooOften !== null) {
+      uploads.refused.push(tooOften)
+      await Promise.all(files.map(file => rm(file.path, { force: true })))
+      ;(request as Request & { uploads?: Uploads }).uploads = uploads
+      return
+    }
     const { taken, refused } = await takeAll(given.photoDir, files)
     uploads.staged = await stageOrDrop(given, request, owner, taken, refused)
     uploads.refused.push(...refused)

@@ -3,7 +3,7 @@ import { requireCragSubject } from '~/crags/crags.server'
 import { formatCode, parseCode, toSlug } from '~/lib/code'
 import { formatBy, toLabel } from '~/notices/components/notice-bands'
 import { confirmWarning, withdrawNotice } from '~/notices/end.server'
-import { noticeKindWords } from '~/notices/notice'
+import { canWithdraw, noticeKindWords } from '~/notices/notice'
 import { findNotice, listRevisions } from '~/notices/notices.server'
 import { requireCan, requirePerson } from '~/people/guards.server'
 import { can } from '~/people/viewer'
@@ -37,9 +37,9 @@ export async function loader({ params, context }: Route.LoaderArgs) {
   const { db, notice, subject } = await requireNotice({ params, context })
   const viewer = context.get(viewerContext)
   const stands = notice.state === 'published'
-  const withdrawing = notice.kind === 'first_warning' ? 'warning:withdraw' : 'notice:manage'
+  const { publishedBy: _, ...shown } = notice
   return {
-    notice,
+    notice: shown,
     revisions: await listRevisions(db, notice.id),
     may: {
       confirm:
@@ -47,7 +47,7 @@ export async function loader({ params, context }: Route.LoaderArgs) {
         notice.kind === 'first_warning' &&
         notice.confirmedAt === null &&
         can(viewer, 'notice:manage', subject),
-      withdraw: stands && can(viewer, withdrawing, subject),
+      withdraw: stands && canWithdraw(viewer, notice, subject),
     },
   }
 }
@@ -58,8 +58,8 @@ export async function action({ request, params, context }: Route.ActionArgs) {
     const { db, notice, subject } = await requireNotice({ params, context })
     const viewer = requirePerson(context.get(viewerContext), request)
     const confirming = form.get('do') === 'confirm'
-    const withdrawing = notice.kind === 'first_warning' ? 'warning:withdraw' : 'notice:manage'
-    requireCan(viewer, confirming ? 'notice:manage' : withdrawing, subject, { seen: true })
+    if (confirming || !canWithdraw(viewer, notice, subject))
+      requireCan(viewer, 'notice:manage', subject, { seen: true })
     const act = toAct(context.get(clockContext)(), { kind: 'person', personId: viewer.person.id })
     const given = { noticeId: notice.id, cragId: notice.cragId, act }
     const done = confirming ? await confirmWarning(db, given) : await withdrawNotice(db, given)
