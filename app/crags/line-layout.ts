@@ -41,3 +41,30 @@ export function spreadLabels(
   }
   return placed
 }
+
+/** The two sizes of the drawing, in its own pixels: the page's row holds all words, the phone's has them below the name. */
+export const layouts = {
+  page: {
+    id: 'page',
+    width: 580,
+    centre: 118,
+    rock: 64,
+    gap: 27,
+    metre: 34,
+    point: 46,
+    name: 15,
+    className: 'hidden sm:block',
+  },
+  phone: {
+    id: 'phone',
+    width: 358,
+    centre: 104,
+    rock: 44,
+    gap: 46,
+    metre: 30,
+    point: 56,
+    name: 16,
+    className: 'sm:hidden',
+  },
+} as const
+export type Layout = (typeof layouts)[keyof typeof layouts]

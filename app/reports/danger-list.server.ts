@@ -12,9 +12,8 @@ import { rules } from '~/people/permission'
 import type { Viewer } from '~/people/viewer'
 import { formatFinding } from './finding-words'
 import { listFindings } from './findings.server'
-import { dangerousStates, type HazardState } from './hazard'
+import { dangerousStates } from './hazard'
 import type { Judgement } from './judgement'
-import type { ReportState } from './report'
 
 /** The crags whose urgency the viewer may see: their organisation looks after them and their role covers it. */
 function listMine(viewer: Viewer): string[] {
@@ -113,7 +112,7 @@ function selectReports(db: Queryable, ids: string[]) {
 
 /** How many people saw each hazard and when last, and the order that stands for it. */
 async function listSeenAndOrders(db: Queryable, ids: string[]) {
-  if (ids.length === 0) return { seen: new Map(), ordered: new Map() }
+  if (ids.length === 0) return { seen: new Map<string, Seen>(), ordered: new Map<string, Ordered>() }
   const seen = await db
     .select({
       hazardId: reports.hazardId,
@@ -130,32 +129,30 @@ async function listSeenAndOrders(db: Queryable, ids: string[]) {
     .where(and(inArray(orderHazards.hazardId, ids), sql`${orders.state} <> 'cancelled'`))
     .orderBy(desc(orders.createdAt))
   return {
-    seen: new Map(seen.map(row => [row.hazardId!, row])),
-    ordered: new Map(ordered.reverse().map(row => [row.hazardId, row])),
+    seen: new Map<string, Seen>(seen.map(row => [row.hazardId!, row])),
+    ordered: new Map<string, Ordered>(ordered.reverse().map(row => [row.hazardId, row])),
   }
 }
 
-export type DangerRow = Awaited<ReturnType<typeof listDanger>>[number]
+type HazardRow = Awaited<ReturnType<typeof selectHazards>>[number]
+type ReportRow = Awaited<ReturnType<typeof selectReports>>[number]
+type Lines = Awaited<ReturnType<typeof listPlacedAnchors>>
 
-/**
- * New reports and open hazards of the viewer's organisations in one list, most dangerous first: at most fifty rows,
- * each with its place, what is wrong, its line, urgency with range, who saw it and the order that stands.
- */
-export async function listDanger(db: Queryable, viewer: Viewer, today: string) {
-  const mine = listMine(viewer)
-  if (mine.length === 0) return []
-  const sorted = await listSorted(db, mine)
-  const ids = (kind: 'report' | 'hazard') => sorted.filter(row => row.kind === kind).map(row => row.id)
-  const hazardIds = ids('hazard')
-  const reportIds = ids('report')
-  const open = hazardIds.length > 0 ? await selectHazards(db, hazardIds) : []
-  const fresh = reportIds.length > 0 ? await selectReports(db, reportIds) : []
-  const { seen, ordered } = await listSeenAndOrders(db, hazardIds)
-  const found = groupBy(await listFindings(db, reportIds), finding => finding.reportId)
-  const climbIds = [...open, ...fresh].flatMap(row => (row.climbId === null ? [] : [row.climbId]))
-  const lines = await listPlacedAnchors(db, [...new Set(climbIds)], today)
+interface Seen {
+  people: number
+  last: string
+}
 
-  const shared = (row: (typeof open)[number] | (typeof fresh)[number]) => ({
+interface Ordered {
+  code: string
+  state: string
+}
+
+/** What a row says of its place and urgency, be it a hazard or a report. */
+function toShared(row: HazardRow | ReportRow, lines: Lines) {
+  const line = row.climbId === null ? [] : (lines.get(row.climbId) ?? [])
+  const results = row.results as Judgement | null
+  return {
     id: row.id,
     climbName: row.climbName,
     climbCode: row.climbCode,
@@ -163,48 +160,62 @@ export async function listDanger(db: Queryable, viewer: Viewer, today: string) {
     anchorCode: row.anchorCode,
     band: row.band,
     bandHigh: row.bandHigh,
-    danger: toDanger(row.results as Judgement | null),
-    line: (row.climbId === null ? [] : (lines.get(row.climbId) ?? [])).map(point => ({
-      code: point.code,
-      alongM: point.alongM,
-      state: point.state,
-    })),
-  })
-  const byId = new Map<string, ReturnType<typeof toHazardRow> | ReturnType<typeof toReportRow>>()
-  function toHazardRow(row: (typeof open)[number]) {
-    const order = ordered.get(row.id) as { code: string; state: string } | undefined
-    const saw = seen.get(row.id) as { people: number; last: string } | undefined
-    return {
-      ...shared(row),
-      kind: 'hazard' as const,
-      state: row.state as HazardState,
-      code: row.code,
-      what: row.headline,
-      seenBy: saw?.people ?? 0,
-      lastSeen: saw?.last ?? null,
-      confirmed: true,
-      order: order ?? null,
-    }
+    danger: results && { times: results.times, low: results.timesLow, high: results.timesHigh },
+    line: line.map(({ code, alongM, state }) => ({ code, alongM, state })),
   }
-  function toReportRow(row: (typeof fresh)[number]) {
-    const position = row.anchorKind === null ? 'Somewhere' : formatPosition(row.anchorKind, row.ordinal ?? 1)
-    return {
-      ...shared(row),
-      kind: 'report' as const,
-      state: row.state as ReportState,
-      code: null,
-      what: `${position}: ${(found.get(row.id) ?? []).map(formatFinding).join('; ')}`,
-      seenBy: 1,
-      lastSeen: row.seenOn,
-      confirmed: row.confirmedAt !== null,
-      order: null,
-    }
-  }
-  for (const row of open) byId.set(row.id, toHazardRow(row))
-  for (const row of fresh) byId.set(row.id, toReportRow(row))
-  return sorted.flatMap(row => byId.get(row.id) ?? [])
 }
 
-function toDanger(results: Judgement | null) {
-  return results === null ? null : { times: results.times, low: results.timesLow, high: results.timesHigh }
+function toHazardRow(row: HazardRow, lines: Lines, seen: Seen | undefined, order: Ordered | undefined) {
+  return {
+    ...toShared(row, lines),
+    kind: 'hazard' as const,
+    state: row.state,
+    code: row.code,
+    what: row.headline,
+    seenBy: seen?.people ?? 0,
+    lastSeen: seen?.last ?? null,
+    confirmed: true,
+    order: order ?? null,
+  }
+}
+
+function toReportRow(row: ReportRow, lines: Lines, found: string) {
+  const position = row.anchorKind === null ? 'Somewhere' : formatPosition(row.anchorKind, row.ordinal ?? 1)
+  return {
+    ...toShared(row, lines),
+    kind: 'report' as const,
+    state: row.state,
+    code: null,
+    what: `${position}: ${found}`,
+    seenBy: 1,
+    lastSeen: row.seenOn,
+    confirmed: row.confirmedAt !== null,
+    order: null,
+  }
+}
+
+export type DangerRow = ReturnType<typeof toHazardRow> | ReturnType<typeof toReportRow>
+
+/**
+ * New reports and open hazards of the viewer's organisations in one list, most dangerous first: at most fifty rows,
+ * each with its place, what is wrong, its line, urgency with range, who saw it and the order that stands.
+ */
+export async function listDanger(db: Queryable, viewer: Viewer, today: string): Promise<DangerRow[]> {
+  const mine = listMine(viewer)
+  if (mine.length === 0) return []
+  const sorted = await listSorted(db, mine)
+  const ids = (kind: 'report' | 'hazard') => sorted.filter(row => row.kind === kind).map(row => row.id)
+  const open = ids('hazard').length > 0 ? await selectHazards(db, ids('hazard')) : []
+  const fresh = ids('report').length > 0 ? await selectReports(db, ids('report')) : []
+  const { seen, ordered } = await listSeenAndOrders(db, ids('hazard'))
+  const found = groupBy(await listFindings(db, ids('report')), finding => finding.reportId)
+  const climbIds = [...open, ...fresh].flatMap(row => row.climbId ?? [])
+  const lines = await listPlacedAnchors(db, [...new Set(climbIds)], today)
+  const words = (id: string) => (found.get(id) ?? []).map(formatFinding).join('; ')
+  const rows: DangerRow[] = [
+    ...open.map(row => toHazardRow(row, lines, seen.get(row.id), ordered.get(row.id))),
+    ...fresh.map(row => toReportRow(row, lines, words(row.id))),
+  ]
+  const byId = new Map(rows.map(row => [row.id, row]))
+  return sorted.flatMap(row => byId.get(row.id) ?? [])
 }

@@ -11,7 +11,7 @@ import { toSheetMail } from './mails'
 import { moveOrder, requireOrder } from './move.server'
 import { endOffer, listJobRows, tellMaker } from './offer.server'
 import type { OfferState } from './order'
-import { findAddress } from './orders.server'
+import { findAddress } from './order-details.server'
 
 /** What a link of an offer's mail opens: the offer, for whom it speaks, and whether it can still be answered. */
 export async function findOffered(db: Queryable, secret: string, now: Date) {

@@ -12,7 +12,8 @@ import { toProgressMail } from './mails'
 import { moveOrder, requireOrder } from './move.server'
 import { tellMaker } from './offer.server'
 import type { CheckerKind, CheckMethod } from './order'
-import { findAddress, findOrderById, findRecord, lockAnchors } from './orders.server'
+import { findAddress, findRecord } from './order-details.server'
+import { findOrderById, lockAnchors } from './orders.server'
 
 const bonded: readonly PartKind[] = ['bonded_eye', 'bonded_staple', 'bonded_stud']
 

@@ -17,7 +17,8 @@ import { refreshAnchors } from '~/reports/refresh.server'
 import { toThanksMail } from './mails'
 import { moveOrder, requireOrder } from './move.server'
 import type { CheckMethod } from './order'
-import { findOrderById, findRecord, lockAnchors, toPlace } from './orders.server'
+import { findRecord } from './order-details.server'
+import { findOrderById, lockAnchors, toPlace } from './orders.server'
 
 type Recorded = NonNullable<Awaited<ReturnType<typeof findRecord>>>
 

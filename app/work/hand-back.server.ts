@@ -7,7 +7,7 @@ import type { Act } from '~/record/act'
 import { toCancelledMail } from './mails'
 import { moveOrder, requireOrder } from './move.server'
 import { tellMaker } from './offer.server'
-import { findAddress } from './orders.server'
+import { findAddress } from './order-details.server'
 
 /** The worker gives an accepted job back, with a word why; it is a draft again and its maker hears of it. */
 export async function handBack(

@@ -10,7 +10,8 @@ import { hashSecret } from '~/record/acts.server'
 import { formatDay } from '~/ui/when'
 import { toOfferMail, toProgressMail } from './mails'
 import { moveOrder, requireOrder } from './move.server'
-import { findAddress, listNeededParts, listRebolters, type Order } from './orders.server'
+import { findAddress, listNeededParts, listRebolters } from './order-details.server'
+import type { Order } from './orders.server'
 
 const offerDays = 7
 

@@ -1,16 +1,8 @@
-import { and, asc, desc, eq, inArray, isNull, ne } from 'drizzle-orm'
+import { and, asc, desc, eq, inArray, ne } from 'drizzle-orm'
 import type { Queryable } from '~/db/client.server'
 import { anchors, areas, crags } from '~/db/schema/crags'
-import { membershipRoles, memberships, organisations, people } from '~/db/schema/people'
-import {
-  offers,
-  orderHazards,
-  orderParts,
-  orders,
-  workChecks,
-  workParts,
-  workRecords,
-} from '~/db/schema/work'
+import { organisations } from '~/db/schema/people'
+import { orderHazards, orders } from '~/db/schema/work'
 import type { Viewer } from '~/people/viewer'
 import { type Hazard, listHazardsById } from '~/reports/hazards.server'
 import { jobKindWords } from './job'
@@ -133,119 +125,6 @@ export async function findOrder(db: Queryable, viewer: Viewer, code: string): Pr
       .limit(1),
   )
   return row ?? null
-}
-
-/** The parts an order needs. */
-export async function listNeededParts(db: Queryable, orderId: string) {
-  return await db
-    .select({
-      kind: orderParts.kind,
-      material: orderParts.material,
-      sizeMm: orderParts.sizeMm,
-      quantity: orderParts.quantity,
-    })
-    .from(orderParts)
-    .where(eq(orderParts.orderId, orderId))
-    .orderBy(asc(orderParts.id))
-    .limit(50)
-}
-
-/** Every offer of an order, newest first, with whom it went to. */
-export async function listOffers(db: Queryable, orderId: string) {
-  return await db
-    .select({
-      id: offers.id,
-      personId: offers.personId,
-      name: people.name,
-      state: offers.state,
-      expiresAt: offers.expiresAt,
-      words: offers.words,
-    })
-    .from(offers)
-    .innerJoin(people, eq(people.id, offers.personId))
-    .where(eq(offers.orderId, orderId))
-    .orderBy(desc(offers.createdAt))
-    .limit(50)
-}
-
-/** The newest record of work on an order with what was fitted and its checks, or null. */
-export async function findRecord(db: Queryable, orderId: string) {
-  const [record] = await db
-    .select({
-      id: workRecords.id,
-      anchorId: workRecords.anchorId,
-      by: workRecords.by,
-      name: people.name,
-      doneOn: workRecords.doneOn,
-      minutes: workRecords.minutes,
-      words: workRecords.words,
-      noPhotoReason: workRecords.noPhotoReason,
-      outcome: workRecords.outcome,
-    })
-    .from(workRecords)
-    .innerJoin(people, eq(people.id, workRecords.by))
-    .where(eq(workRecords.orderId, orderId))
-    .orderBy(desc(workRecords.createdAt))
-    .limit(1)
-  if (record === undefined) return null
-  const fitted = await db
-    .select({
-      replaces: workParts.replaces,
-      side: workParts.side,
-      kind: workParts.kind,
-      material: workParts.material,
-      sizeMm: workParts.sizeMm,
-      marking: workParts.marking,
-    })
-    .from(workParts)
-    .where(eq(workParts.workRecordId, record.id))
-    .orderBy(asc(workParts.id))
-  const checks = await db
-    .select({
-      by: workChecks.by,
-      name: people.name,
-      whoKind: workChecks.whoKind,
-      how: workChecks.how,
-      outcome: workChecks.outcome,
-      words: workChecks.words,
-      at: workChecks.at,
-    })
-    .from(workChecks)
-    .innerJoin(people, eq(people.id, workChecks.by))
-    .where(eq(workChecks.workRecordId, record.id))
-    .orderBy(desc(workChecks.at))
-  return { ...record, fitted, checks }
-}
-
-/** The organisation's rebolters, of age, whom a job can be offered to. */
-export async function listRebolters(db: Queryable, organisationId: string) {
-  const rows = await db
-    .selectDistinct({ id: people.id, name: people.name, email: people.email })
-    .from(memberships)
-    .innerJoin(membershipRoles, eq(membershipRoles.membershipId, memberships.id))
-    .innerJoin(people, eq(people.id, memberships.personId))
-    .where(
-      and(
-        eq(memberships.organisationId, organisationId),
-        isNull(memberships.endedAt),
-        eq(membershipRoles.role, 'rebolter'),
-        eq(people.over18, true),
-      ),
-    )
-    .orderBy(asc(people.name))
-    .limit(200)
-  return rows.flatMap(row => (row.email === null ? [] : [{ ...row, email: row.email }]))
-}
-
-/** A person's name and address for a mail, or null once erased. */
-export async function findAddress(db: Queryable, personId: string | null) {
-  if (personId === null) return null
-  const [row] = await db
-    .select({ id: people.id, name: people.name, email: people.email })
-    .from(people)
-    .where(eq(people.id, personId))
-    .limit(1)
-  return row?.email == null ? null : { ...row, email: row.email }
 }
 
 /** Locks the fixed points of an order's hazards, lowest id first: the first thing every command of work does. */

@@ -12,7 +12,8 @@ import { refreshAnchors } from '~/reports/refresh.server'
 import { toCheckDueMail } from './mails'
 import { moveOrder, requireOrder } from './move.server'
 import { tellMaker } from './offer.server'
-import { findOrderById, listRebolters, lockAnchors, type Order } from './orders.server'
+import { listRebolters } from './order-details.server'
+import { findOrderById, lockAnchors, type Order } from './orders.server'
 
 /** One part fitted, in the place of another or beside what is there. */
 export interface FittedPart {

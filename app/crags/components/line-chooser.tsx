@@ -1,9 +1,9 @@
 import type { Below } from '../anchor'
 import type { ConditionState } from '../condition-state'
 import { conditionShort } from '../condition-state'
+import type { DrawnPoint } from '../drawn-point'
 import { type LineScale, spreadLabels, toY } from '../line-layout'
 import { MarkAt } from './condition-mark'
-import type { DrawnPoint } from './line'
 import { Ground, LineScene } from './line-scene'
 
 const width = 358

@@ -13,7 +13,8 @@ import { findSheetOrder } from '~/work/answer.server'
 import { Fact, JobFacts } from '~/work/components/job-facts'
 import { WorkCaution } from '~/work/components/work-caution'
 import { orderStateWords } from '~/work/order'
-import { findOrderById, listNeededParts } from '~/work/orders.server'
+import { listNeededParts } from '~/work/order-details.server'
+import { findOrderById } from '~/work/orders.server'
 import type { Route } from './+types/$token'
 
 export const meta: Route.MetaFunction = () => [

@@ -8,15 +8,9 @@ import { findings, hazards, reports } from '~/db/schema/reports'
 import { inTransaction } from '~/db/transaction.server'
 import { stranger } from '~/people/viewer'
 import { listDanger } from '~/reports/danger-list.server'
-import {
-  answerDetail,
-  askDetail,
-  declineReport,
-  putOnRecord,
-  takeIn,
-  withdrawReport,
-} from '~/reports/decide.server'
+import { askDetail, declineReport, putOnRecord, takeIn } from '~/reports/decide.server'
 import { refreshAnchors } from '~/reports/refresh.server'
+import { answerDetail, withdrawReport } from '~/reports/reply.server'
 import { confirmGuest } from '~/reports/send.server'
 import { testDatabase } from '../database'
 import { actBy, findPerson, findPoint, groove, links, now, reportRing, seedDemo, viewerOf } from '../demo'

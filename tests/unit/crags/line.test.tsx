@@ -3,10 +3,11 @@ import { MemoryRouter } from 'react-router'
 import { describe, expect, it } from 'vitest'
 import { ConditionMark } from '~/crags/components/condition-mark'
 import { ConditionsBar } from '~/crags/components/conditions-bar'
-import { type DrawnPoint, Line } from '~/crags/components/line'
+import { Line } from '~/crags/components/line'
 import { LineChooser } from '~/crags/components/line-chooser'
 import { Strip } from '~/crags/components/strip'
 import { conditionStates } from '~/crags/condition-state'
+import type { DrawnPoint } from '~/crags/drawn-point'
 import { spreadLabels } from '~/crags/line-layout'
 
 const point = (name: string, alongM: number, given: Partial<DrawnPoint> = {}): DrawnPoint => ({
