@@ -76,10 +76,21 @@ const linked = (text: string) =>
     )
     .join('')
 
+/** What a `cid:` address can mean: as it stands, and with its percent signs undone where they are well formed. */
+function toContentIds(id: string): string[] {
+  try {
+    return [id, decodeURIComponent(id)]
+  } catch {
+    return [id]
+  }
+}
+
 /** The html of a mail for its frame: links open in a new tab, pictures of the mail come from its own parts. */
 export function toFramePage(letter: Letter): string {
   const html = letter.html.replace(/cid:([^"'\s)>]+)/gi, (whole, id: string) => {
-    const index = letter.parts.findIndex(part => part.contentId === decodeURIComponent(id))
+    const index = letter.parts.findIndex(
+      part => part.contentId !== null && toContentIds(id).includes(part.contentId),
+    )
     return index === -1 ? whole : `/messages/${letter.id}/parts/${index}`
   })
   const base = '<base target="_blank">'

@@ -87,26 +87,36 @@ function listening(listen: () => void, server: Server): Promise<number> {
 
 function answer(list: () => Letter[]): RequestListener {
   return (request, response) => {
-    const path = new URL(request.url ?? '/', 'http://inbox').pathname
+    const [path] = (request.url ?? '/').split('?')
     if (path === '/') return sendHtml(response, toInboxPage(list()))
     if (path === '/messages.json') return sendJson(response, list())
-    const [, id, what, index] = path.match(/^\/messages\/(\d+)(?:\/(html|parts)(?:\/(\d+))?)?$/) ?? []
+    const [, id, what, index] = path!.match(/^\/messages\/(\d+)(?:\/(html|parts)(?:\/(\d+))?)?$/) ?? []
     const letter = list().find(each => each.id === Number(id))
     if (letter === undefined) return sendNothing(response)
     if (what === undefined) return sendHtml(response, toLetterPage(letter))
-    if (what === 'html') return sendHtml(response, toFramePage(letter))
+    // no script of a mail may run beside the inbox, opened by itself no more than in its frame
+    if (what === 'html') return sendHtml(response, toFramePage(letter), frameRules)
     const part = letter.parts[Number(index)]
     if (part === undefined) return sendNothing(response)
     // a file that is a page must not run beside the inbox
     response
-      .writeHead(200, { 'Content-Type': part.type, 'Content-Security-Policy': 'sandbox' })
+      .writeHead(200, {
+        'Content-Type': toMediaType(part.type),
+        'Content-Security-Policy': 'sandbox',
+        'X-Content-Type-Options': 'nosniff',
+      })
       .end(part.bytes)
   }
 }
 
-function sendHtml(response: ServerResponse, html: string): void {
+const frameRules = { 'Content-Security-Policy': 'sandbox allow-popups allow-popups-to-escape-sandbox' }
+
+/** What a mail calls its part, when a header can say so. */
+const toMediaType = (type: string) => (/^[\w.+-]+\/[\w.+-]+$/.test(type) ? type : 'application/octet-stream')
+
+function sendHtml(response: ServerResponse, html: string, rules: Record<string, string> = {}): void {
   response
-    .writeHead(200, { 'Content-Type': 'text/html; charset=utf-8', 'Cache-Control': 'no-store' })
+    .writeHead(200, { 'Content-Type': 'text/html; charset=utf-8', 'Cache-Control': 'no-store', ...rules })
     .end(html)
 }
 

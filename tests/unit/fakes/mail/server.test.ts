@@ -1,3 +1,5 @@
+import { once } from 'node:events'
+import { get } from 'node:http'
 import { createTransport } from 'nodemailer'
 import { afterEach, beforeEach, expect, test } from 'vitest'
 import { type FakeMail, start } from '../../../../fakes/mail/server'
@@ -84,4 +86,63 @@ test('a delivery that was told to fail is refused for now, and the one after it 
 
 test('a mail nobody sent answers 404', async () => {
   expect((await fetch(`${mail.url}/messages/7`)).status).toBe(404)
+})
+
+/** Asks for a path as it stands, which `fetch` would tidy up first. */
+async function askRaw(path: string): Promise<number | undefined> {
+  const [response] = await once(get(mail.url, { path }), 'response')
+  response.resume()
+  return response.statusCode
+}
+
+test.each(['//', '/messages/1/html', 'http://[/', '/%zz'])(
+  'an address that cannot be, such as %s, answers 404 and the inbox stays up',
+  async path => {
+    expect(await askRaw(path)).toBe(404)
+    expect((await fetch(mail.url)).status).toBe(200)
+  },
+)
+
+test('a mail with a broken picture address and a broken kind of file is shown all the same', async () => {
+  const raw = [
+    'Subject: Broken',
+    'Content-Type: multipart/mixed; boundary=q',
+    '',
+    '--q',
+    'Content-Type: text/html',
+    '',
+    '<img src="cid:%zz">',
+    '--q',
+    'Content-Type: ima\u0001ge/p\u00e9ng',
+    'Content-Disposition: attachment; filename=ring',
+    '',
+    'ring',
+    '--q--',
+    '',
+  ].join('\r\n')
+  await createTransport(mail.smtpUrl).sendMail({
+    envelope: { from: 'gear@skerrow.example', to: 'mara@example.org' },
+    raw,
+  })
+  const { id } = mail.seen()[0]!
+  expect(await read(`/messages/${id}/html`)).toContain('cid:%zz')
+  const part = await fetch(`${mail.url}/messages/${id}/parts/0`)
+  expect([part.status, part.headers.get('content-type')]).toEqual([200, 'application/octet-stream'])
+})
+
+test('the html of a mail opened by itself may run no script', async () => {
+  await send({ html: '<script>document.title = "ran"</script>' })
+  const page = await fetch(`${mail.url}/messages/${mail.seen()[0]!.id}/html`)
+  const rules = page.headers.get('content-security-policy')
+  expect(rules).toMatch(/^sandbox/)
+  expect(rules).not.toContain('allow-scripts')
+})
+
+test('all mails are gone after a reset, and numbers of mails are not used again', async () => {
+  await send()
+  const [first] = mail.seen()
+  mail.reset()
+  expect(mail.seen()).toEqual([])
+  await send()
+  expect(mail.seen()[0]!.id).not.toBe(first!.id)
 })
