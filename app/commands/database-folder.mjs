@@ -99,8 +99,8 @@ export async function claimFolder(folder, data = join(folder, 'data')) {
   if (isLeftOver && (await endProcess(server))) return
   const who = isLeftOver ? server.pid : (holder?.starter?.pid ?? server.pid)
   throw new Problem(
-    `The database folder ${folder} is in use by process ${who}. End that one first, or use another folder, ` +
-      'for example: DATA_DIR=.data-two npm start',
+    `Cragfettle already runs here: the database folder ${folder} is in use by process ${who}. End that one first ` +
+      '(Ctrl-C where it was started), or start another one beside it, for example: DATA_DIR=.data-two PORT=3001 npm start',
   )
 }
 

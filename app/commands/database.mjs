@@ -132,10 +132,12 @@ function launch(folder, data, access) {
   rmSync(socket, { force: true })
   writeSecret(setup, toSetup(access))
   const out = openSync(log, 'w', 0o600)
+  const [program = '', ...before] = [...endingWithUs(), findProgram('mariadbd') ?? 'mariadbd']
   // detached: Ctrl-C in the terminal must reach the app first, and the database only through us
   const child = spawn(
-    findProgram('mariadbd') ?? 'mariadbd',
+    program,
     [
+      ...before,
       '--no-defaults',
       `--datadir=${data}`,
       `--socket=${socket}`,
@@ -152,6 +154,12 @@ function launch(folder, data, access) {
     { stdio: ['ignore', out, out], detached: true },
   )
   return { child, socket, log, setup }
+}
+
+/** What stands before a program so that it is asked to end when we are killed without having time for it. */
+function endingWithUs() {
+  const setpriv = findProgram('setpriv')
+  return setpriv === null ? [] : [setpriv, '--pdeathsig', 'TERM', '--']
 }
 
 /**

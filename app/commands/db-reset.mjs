@@ -2,6 +2,7 @@ import { rmSync } from 'node:fs'
 import { join } from 'node:path'
 import { buildApp, importBuilt } from './build.mjs'
 import { installDebian } from './debian.mjs'
+import { requireFolders } from './folders.mjs'
 import { live } from './life.mjs'
 import { installPackages } from './packages.mjs'
 import { Problem } from './problem.mjs'
@@ -19,6 +20,7 @@ await live(async life => {
     throw new Problem(
       `db:reset is for the demo on this machine, and APP_URL is ${installation.appUrl}. For another data folder, for example: env -u APP_URL DATA_DIR=.data-two npm run db:reset`,
     )
+  await requireFolders(installation)
   await installDebian(['database'])
   await installPackages()
   await buildApp()
@@ -26,8 +28,6 @@ await live(async life => {
   const { markForReset, ownDatabase } = await import('./services.mjs')
   const app = /** @type {typeof import('../server')} */ (await importBuilt('index'))
   const { seed } = /** @type {typeof import('../../drizzle/seed')} */ (await importBuilt('seed'))
-  const { claimFolder } = await import('./database-folder.mjs')
-  await claimFolder(join(dataDir, 'database'))
   markForReset(dataDir)
   if (photoDir === join(dataDir, 'photos')) rmSync(photoDir, { recursive: true, force: true })
   await ownDatabase(installation, { ...app, seed }, life)

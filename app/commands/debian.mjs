@@ -38,10 +38,7 @@ const needs = {
  * @param {(keyof typeof needs)[]} wanted
  */
 export async function installDebian(wanted) {
-  const packages = wanted
-    .map(name => needs[name])
-    .filter(({ programs }) => programs.some(program => findProgram(program) === null))
-    .flatMap(need => need.packages)
+  const packages = listMissing(wanted)
   if (packages.length === 0) return
   const install = ['apt-get', 'install', '-y', '--no-install-recommends', ...packages]
   const byHand = `sudo apt-get update && sudo ${install.join(' ')}`
@@ -59,6 +56,22 @@ export async function installDebian(wanted) {
     await run(['apt-get', 'update'], tell)
     await run(install, tell)
   })
+  const missing = listMissing(wanted)
+  if (missing.length > 0)
+    throw new Problem(
+      `${missing.join(', ')} is installed, but its programs are not found on PATH: ${process.env.PATH}`,
+    )
+}
+
+/**
+ * The packages whose programs are not all there.
+ * @param {(keyof typeof needs)[]} wanted
+ */
+function listMissing(wanted) {
+  return wanted
+    .map(name => needs[name])
+    .filter(({ programs }) => programs.some(program => findProgram(program) === null))
+    .flatMap(need => need.packages)
 }
 
 /** What stands before a command to run it as root: nothing, sudo, or null when neither is allowed. */

@@ -1,13 +1,18 @@
 import { buildGround } from './build.mjs'
 import { installDebian } from './debian.mjs'
+import { requireFolders } from './folders.mjs'
 import { live } from './life.mjs'
 import { installPackages } from './packages.mjs'
 import { findFreePort, requireFreePort } from './ports.mjs'
 import { serveUntilEnd } from './serving.mjs'
 import { readSettings } from './settings.mjs'
 
-await live(async life => {
+await live(develop, { runsUntilStopped: true })
+
+/** @param {import('./life.mjs').Life} life */
+async function develop(life) {
   const installation = readSettings(process.env)
+  await requireFolders(installation)
   await requireFreePort(installation)
   if (installation.databaseUrl === null) await installDebian(['database'])
   await installPackages()
@@ -35,4 +40,4 @@ await live(async life => {
   const { settings, inboxUrl } = await startServices(installation, parts, life)
   const ready = { settings: { ...settings, production: false }, inboxUrl, accounts: demo.demoAccounts }
   await serveUntilEnd({ serve: app.serve, ...ready, vite }, life)
-})
+}

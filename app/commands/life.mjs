@@ -1,3 +1,4 @@
+import { constants } from 'node:os'
 import { fileURLToPath } from 'node:url'
 import { Problem } from './problem.mjs'
 import { endRunning } from './run.mjs'
@@ -15,10 +16,12 @@ export const root = fileURLToPath(new URL('../..', import.meta.url))
 
 /**
  * Runs a command to its end or until Ctrl-C or SIGTERM, and ends whatever it started and nothing else. A Problem is
- * printed as its words, any other error with its stack; both exit with 1.
+ * printed as its words, any other error with its stack; both exit with 1. Being stopped counts as a fault (128 and the
+ * signal's number, as shells have it), unless the command `runsUntilStopped`. Asked again while it ends, it goes at once.
  * @param {(life: Life) => Promise<unknown>} command
+ * @param {{ runsUntilStopped?: boolean }} [options]
  */
-export async function live(command) {
+export async function live(command, { runsUntilStopped = false } = {}) {
   process.chdir(root)
   /** @type {{ close: () => Promise<unknown>, closeNow: () => void, isClosed: boolean }[]} */
   const started = []
@@ -27,7 +30,7 @@ export async function live(command) {
 
   /** @param {number} code */
   async function closeAll(code) {
-    endRunning()
+    await endRunning()
     let worst = code
     for (const each of [...started].reverse()) {
       try {
@@ -52,10 +55,18 @@ export async function live(command) {
     },
     isEnding: () => ending !== null,
   }
+  let askedAt = 0
   for (const signal of /** @type {const} */ (['SIGINT', 'SIGTERM', 'SIGHUP']))
     process.on(signal, () => {
-      if (ending === null) console.log('\nEnding …')
-      life.end(0)
+      const code = runsUntilStopped ? 0 : 128 + constants.signals[signal]
+      if (ending === null) {
+        console.log('\nEnding …')
+        askedAt = Date.now()
+        life.end(code)
+      } else if (Date.now() - askedAt > 1_000) {
+        // within the second it is the same Ctrl-C, passed on by npm
+        process.exit(code)
+      }
     })
   process.on('uncaughtException', error => {
     tellError(error)

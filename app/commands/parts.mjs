@@ -4,11 +4,16 @@ import { join, resolve } from 'node:path'
 import { buildApp } from './build.mjs'
 import { countCheck, countPlaywright, countVitest, sumCounts } from './counts.mjs'
 import { Problem } from './problem.mjs'
-import { formatSeconds } from './progress.mjs'
+import { formatSeconds, showStep } from './progress.mjs'
 import { runToEnd } from './run.mjs'
 
 /** @typedef {import('./counts.mjs').Counts} Counts */
-/** @typedef {{ title: string, run: (say: (line: string) => void) => Promise<Counts> }} Part */
+/**
+ * @typedef {object} Part
+ * @property {string} title
+ * @property {boolean} [isTelling] whether it says itself how far it is
+ * @property {(say: (line: string) => void) => Promise<Counts>} run
+ */
 
 /** @param {string} name */
 const bin = name => resolve('node_modules/.bin', name)
@@ -72,6 +77,7 @@ export const parts = {
   integration: tests('integration'),
   build: {
     title: 'build',
+    isTelling: true,
     async run(say) {
       try {
         await buildApp()
@@ -85,6 +91,7 @@ export const parts = {
   },
   journeys: {
     title: 'journeys',
+    isTelling: true,
     run: say =>
       withReport(async file => {
         const given = ['test', '--config', 'tests/playwright.config.ts', '--reporter=list,json']
@@ -106,21 +113,34 @@ export const parts = {
 export async function runParts(list) {
   /** @type {Counts[]} */
   const all = []
-  for (const { title, run } of list) {
-    const began = Date.now()
-    console.log(`\n${title} …`)
-    const counts = await run(line => console.log(line)).catch(error => {
-      console.error(error)
-      return countCheck(1, title)
+  for (const part of list) {
+    const { say, done } = part.isTelling ? showTelling(part.title) : showStep(part.title)
+    const counts = await part.run(say).catch(error => {
+      say(error.stack)
+      return countCheck(1, part.title)
     })
-    const words = `${counts.passed} passed, ${counts.failed} failed`
-    console.log(`${title}: ${words}, ${formatSeconds(Date.now() - began)}`)
+    done(`${counts.passed} passed, ${counts.failed} failed`)
     all.push(counts)
   }
   const sum = sumCounts(all)
   if (sum.failed > 0) console.log(`\nFailed:\n${sum.failures.map(title => `  ${title}`).join('\n')}`)
   console.log(`\n${sum.passed} passed, ${sum.failed} failed`)
   return sum
+}
+
+/**
+ * The frame around a part that says itself how far it is.
+ * @param {string} title
+ */
+function showTelling(title) {
+  const began = Date.now()
+  console.log(`  ${title} …`)
+  return {
+    /** @param {string} line */
+    say: line => console.log(line),
+    /** @param {string} note */
+    done: note => console.log(`  ${title}: ${note}, ${formatSeconds(Date.now() - began)}`),
+  }
 }
 
 /**

@@ -1,15 +1,27 @@
 const isScreen = Boolean(process.stdout.isTTY) && !process.env.CI
 const barWidth = 24
+/** how often a log hears that a step still goes on */
+const logEvery = 30_000
 
 /**
- * Shows one long step. On a terminal its line is rewritten in place; in a log the step is one line when it begins and
- * one when it ends.
+ * Shows one long step. On a terminal its line is rewritten in place, with the seconds so far; a log gets a line when the
+ * step begins, one every half minute, and one when it ends.
  * @param {string} title
  */
 export function showStep(title) {
   const began = Date.now()
-  let shown = ''
-  if (isScreen) process.stdout.write(`  ${title} …`)
+  let now = { doing: '', share: /** @type {number | undefined} */ (undefined) }
+  const draw = () => {
+    const bar = now.share === undefined ? '…' : toBar(now.share)
+    const line = `  ${title} ${bar} ${formatWhole(Date.now() - began)}  ${now.doing}`
+    process.stdout.write(`\r\x1b[2K${line.slice(0, (process.stdout.columns || 100) - 1)}`)
+  }
+  const tick = setInterval(
+    () => (isScreen ? draw() : console.log(`  ${title}: ${formatWhole(Date.now() - began)} … ${now.doing}`)),
+    isScreen ? 1_000 : logEvery,
+  )
+  tick.unref()
+  if (isScreen) draw()
   else console.log(`  ${title} …`)
   return {
     /**
@@ -18,18 +30,22 @@ export function showStep(title) {
      * @param {number} [share]
      */
     tell(doing, share) {
-      if (!isScreen) return
-      const line = `  ${title} ${share === undefined ? '…' : toBar(share)} ${doing}`
-      if (line === shown) return
-      shown = line
-      process.stdout.write(`\r\x1b[2K${line.slice(0, (process.stdout.columns ?? 100) - 1)}`)
+      now = { doing, share }
+      if (isScreen) draw()
+    },
+    /** A line that stays, above the step's own. @param {string} line */
+    say(line) {
+      process.stdout.write(isScreen ? `\r\x1b[2K${line}\n` : `${line}\n`)
+      if (isScreen) draw()
     },
     /** @param {string} [note] */
     done(note = '') {
+      clearInterval(tick)
       const line = `  ${title}: ${note === '' ? 'done' : note}, ${formatSeconds(Date.now() - began)}`
       process.stdout.write(isScreen ? `\r\x1b[2K${line}\n` : `${line}\n`)
     },
     failed() {
+      clearInterval(tick)
       process.stdout.write(isScreen ? `\r\x1b[2K  ${title}: failed\n` : `  ${title}: failed\n`)
     },
   }
@@ -58,6 +74,11 @@ export async function inStep(title, work) {
 function toBar(share) {
   const full = Math.round(Math.min(1, Math.max(0, share)) * barWidth)
   return `[${'#'.repeat(full)}${'.'.repeat(barWidth - full)}]`
+}
+
+/** @param {number} milliseconds */
+function formatWhole(milliseconds) {
+  return `${Math.floor(milliseconds / 1000)} s`
 }
 
 /** @param {number} milliseconds */

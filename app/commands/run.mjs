@@ -1,4 +1,6 @@
 import { spawn } from 'node:child_process'
+import { once } from 'node:events'
+import { setTimeout as pause } from 'node:timers/promises'
 import { Problem } from './problem.mjs'
 
 /** @typedef {{ code: number | null, output: string }} Ended */
@@ -6,9 +8,15 @@ import { Problem } from './problem.mjs'
 /** @type {Set<import('node:child_process').ChildProcess>} */
 const running = new Set()
 
-/** Asks every program that still runs to end. */
-export function endRunning() {
+/** how long a program may take to put its own things away */
+const patience = 20_000
+
+/** Asks every program that still runs to end, and waits a while for it. */
+export async function endRunning() {
+  if (running.size === 0) return
+  const ended = Promise.all([...running].map(child => once(child, 'close')))
   for (const child of running) child.kill('SIGTERM')
+  await Promise.race([ended, pause(patience)])
 }
 
 /**

@@ -33,8 +33,6 @@ import { inStep } from './progress.mjs'
  */
 export async function startServices(installation, parts, life) {
   const { github: _, migrate: __, ...rest } = installation
-  mkdirSync(installation.dataDir, { recursive: true, mode: 0o700 })
-  mkdirSync(installation.photoDir, { recursive: true, mode: 0o700 })
   const databaseUrl = installation.databaseUrl
     ? await givenDatabase(installation, installation.databaseUrl, parts)
     : await ownDatabase(installation, parts, life)
@@ -65,7 +63,7 @@ export function requireSecret(dataDir) {
  * @param {Life} life
  */
 async function startInbox({ port }, { startMail }, life) {
-  const mail = await startMail({ port: await findFreePort(port + 1), smtpPort: 0 })
+  const mail = await startMail({ port: await findFreePort(port < 65_535 ? port + 1 : 0), smtpPort: 0 })
   life.onEnd(() => mail.close())
   return mail
 }

@@ -1,3 +1,5 @@
+import { isIP } from 'node:net'
+
 /*
  * One setting each: the value it means, or a list of one sentence that ends "X is …, but" and holds an example.
  */
@@ -102,15 +104,28 @@ export function toSecret(text) {
 export function toTrustProxy(text) {
   if (text === 'false' || text === '0') return false
   if (/^[1-9]$/.test(text)) return Number(text)
-  if (
-    /^(loopback|linklocal|uniquelocal|[0-9a-f.:]+(\/\d+)?)(\s*,\s*(loopback|linklocal|uniquelocal|[0-9a-f.:]+(\/\d+)?))*$/i.test(
-      text,
-    )
-  )
-    return text
+  if (text.split(',').every(each => isNetwork(each.trim()))) return text
   return [
     'it must be the number of proxies in front of this one, or their addresses, for example: TRUST_PROXY=1',
   ]
+}
+
+/** @param {string} text */
+function isNetwork(text) {
+  if (['loopback', 'linklocal', 'uniquelocal'].includes(text)) return true
+  const [address = '', bits, ...more] = text.split('/')
+  const longest = { 0: -1, 4: 32, 6: 128 }[isIP(address)] ?? -1
+  if (bits === undefined) return longest > 0
+  return more.length === 0 && /^\d{1,3}$/.test(bits) && Number(bits) > 0 && Number(bits) <= longest
+}
+
+const logLevels = ['trace', 'debug', 'info', 'warn', 'error', 'fatal', 'silent']
+
+/** @param {string} text */
+export function toLogLevel(text) {
+  return logLevels.includes(text)
+    ? text
+    : [`it must be one of ${logLevels.join(', ')}, for example: LOG_LEVEL=warn`]
 }
 
 /** @param {string} text */

@@ -8,6 +8,7 @@ import {
   toEmail,
   toFlag,
   toHost,
+  toLogLevel,
   toMailFrom,
   toPort,
   toSecret,
@@ -78,7 +79,8 @@ export function readSettings(env) {
 
   const port = read('PORT', toPort, 3000)
   const host = read('HOST', toHost, '127.0.0.1')
-  const appUrl = read('APP_URL', toAddress, `http://127.0.0.1:${port}`)
+  const appUrl = read('APP_URL', toAddress, toDefaultUrl(host, port))
+  read('LOG_LEVEL', toLogLevel, 'info')
   const dataDir = resolve(env.DATA_DIR?.trim() || '.data')
   const demo = isLoopback(new URL(appUrl).hostname)
   const settings = {
@@ -106,6 +108,15 @@ export function readSettings(env) {
   if (!demo) wrong.push(...listPublicFaults(env, appUrl))
   if (wrong.length > 0) throw new Problem(wrong.join('\n'))
   return settings
+}
+
+/**
+ * @param {string} host
+ * @param {number} port
+ */
+function toDefaultUrl(host, port) {
+  if (!isLoopback(host)) return `http://127.0.0.1:${port}`
+  return `http://${host.includes(':') ? `[${host}]` : host}:${port}`
 }
 
 /**

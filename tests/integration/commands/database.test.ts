@@ -4,6 +4,8 @@ import { mkdtempSync, readFileSync, rmSync } from 'node:fs'
 import { createConnection } from 'mysql2/promise'
 import { afterEach, beforeEach, expect, test } from 'vitest'
 import { type RunningDatabase, startDatabase } from '../../../app/commands/database.mjs'
+import { claimFolder } from '../../../app/commands/database-folder.mjs'
+import { findProcess } from '../../../app/commands/processes.mjs'
 
 let folder: string
 let running: RunningDatabase[]
@@ -14,8 +16,10 @@ beforeEach(() => {
   child = null
 })
 afterEach(async () => {
-  child?.kill('SIGKILL')
+  await kill(child)
   for (const database of running) await database.stop()
+  // ends the server of a start that was killed, should it still run
+  await claimFolder(folder)
   rmSync(folder, { recursive: true })
 })
 
@@ -35,6 +39,12 @@ console.log('up')`
   })
   await once(child.stdout!, 'data')
   return child
+}
+
+async function kill(process: ChildProcess | null): Promise<void> {
+  if (process === null || process.exitCode !== null || process.signalCode !== null) return
+  process.kill('SIGKILL')
+  await once(process, 'exit')
 }
 
 const serverPid = () => Number(readFileSync(`${folder}/mariadb.pid`, 'utf8'))
@@ -71,8 +81,7 @@ test('a second start on a folder in use says who uses it and leaves it running',
 test('a database whose start was killed is taken over by the next start', async () => {
   const other = await startElsewhere()
   const left = serverPid()
-  other.kill('SIGKILL')
-  await once(other, 'exit')
+  await kill(other)
   const { ownerUrl } = await start()
   expect(serverPid()).not.toBe(left)
   expect(await rowsOf(ownerUrl, 'SELECT 1 AS one')).toEqual([{ one: 1 }])
@@ -81,8 +90,14 @@ test('a database whose start was killed is taken over by the next start', async 
 test('the pid file and the socket of a database that crashed do not block the next start', async () => {
   const other = await startElsewhere()
   process.kill(serverPid(), 'SIGKILL')
-  other.kill('SIGKILL')
-  await once(other, 'exit')
+  await kill(other)
   const { ownerUrl } = await start()
   expect(await rowsOf(ownerUrl, 'SELECT 1 AS one')).toEqual([{ one: 1 }])
+})
+
+test('the database of a start that was killed ends by itself', async () => {
+  const other = await startElsewhere()
+  const left = serverPid()
+  await kill(other)
+  await expect.poll(() => findProcess(left), { timeout: 10_000 }).toBeNull()
 })

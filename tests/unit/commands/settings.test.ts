@@ -38,6 +38,14 @@ test('another port alone also changes the address', () => {
   expect(readSettings({ PORT: '4100' }).appUrl).toBe('http://127.0.0.1:4100')
 })
 
+test.each([
+  ['::1', 'http://[::1]:3000'],
+  ['localhost', 'http://localhost:3000'],
+  ['127.0.0.2', 'http://127.0.0.2:3000'],
+])('listening on %s of this machine alone, people come by %s', (HOST, appUrl) => {
+  expect(readSettings({ HOST })).toMatchObject({ appUrl, demo: true })
+})
+
 test('an empty value counts as not given', () => {
   expect(readSettings({ PORT: '', SMTP_URL: ' ' })).toMatchObject({ port: 3000, smtpUrl: null })
 })
@@ -90,6 +98,11 @@ test.each([
   ['MIGRATE', 'yes'],
   ['MAIL_FROM', 'Cragfettle'],
   ['TRUST_PROXY', 'true'],
+  ['TRUST_PROXY', '10.0.0'],
+  ['TRUST_PROXY', '10.0.0.0/33'],
+  ['TRUST_PROXY', '0.0.0.0/0'],
+  ['TRUST_PROXY', 'loopback,'],
+  ['LOG_LEVEL', 'loud'],
   ['OPERATOR_EMAIL', 'ada'],
   ['CLOCK_AT', 'tomorrow'],
   ['CLOCK_AT', '2027-13-12T12:00:00Z'],
@@ -126,6 +139,7 @@ test.each([
   ['1', 1],
   ['0', false],
   ['loopback, 10.0.0.0/8', 'loopback, 10.0.0.0/8'],
+  ['fd00::/8', 'fd00::/8'],
 ])('TRUST_PROXY=%s reaches the server as %s', (given, value) => {
   expect(readSettings({ TRUST_PROXY: given }).trustProxy).toBe(value)
 })
