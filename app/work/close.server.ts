@@ -4,6 +4,7 @@ import { addPart } from '~/crags/places.server'
 import type { Database, Transaction } from '~/db/client.server'
 import { parts } from '~/db/schema/parts'
 import { inCommand, Refusal } from '~/db/transaction.server'
+import { toDay } from '~/lib/dates'
 import { queueMail } from '~/mail/outbox.server'
 import { endFirstWarnings } from '~/notices/end.server'
 import type { Act } from '~/record/act'
@@ -14,11 +15,13 @@ import { type Hazard, listHazardReporters, moveHazard } from '~/reports/hazards.
 import type { ReportLinks } from '~/reports/links.server'
 import { listPhotos, publishPhotos } from '~/reports/photos.server'
 import { refreshAnchors } from '~/reports/refresh.server'
+import type { HowSeen } from '~/reports/report'
+import { requireWork } from './lock.server'
 import { toThanksMail } from './mails'
-import { moveOrder, requireOrder } from './move.server'
+import { moveOrder } from './move.server'
 import type { CheckMethod } from './order'
 import { findRecord } from './order-details.server'
-import { findOrderById, lockAnchors, toPlace } from './orders.server'
+import { type Order, toPlace } from './orders.server'
 
 type Recorded = NonNullable<Awaited<ReturnType<typeof findRecord>>>
 
@@ -46,23 +49,21 @@ async function renewParts(tx: Transaction, act: Act, record: Recorded): Promise<
   }
 }
 
-/** The check of the work stands at the fixed point: somebody trained saw nothing wrong, on the day of the check. */
-async function putCheckOnRecord(tx: Transaction, act: Act, hazard: Hazard, record: Recorded): Promise<void> {
+const seen: Record<CheckMethod, HowSeen> = { on_the_rope: 'on_it', load_test: 'on_it', from_photos: 'photo' }
+
+/** The check of the work stands at each of its points: somebody trained saw nothing wrong, on the day of the check. */
+async function putCheckOnRecord(tx: Transaction, act: Act, order: Order, record: Recorded): Promise<void> {
   const check = record.checks[0]
-  if (check === undefined || hazard.anchorId === null) return
-  const seen: Record<CheckMethod, 'on_it' | 'photo'> = {
-    on_the_rope: 'on_it',
-    load_test: 'on_it',
-    from_photos: 'photo',
-  }
-  await recordCheck(tx, act, {
-    cragId: hazard.cragId,
-    climbId: hazard.climbId,
-    anchorId: hazard.anchorId,
-    personId: check.by,
-    seenOn: check.at.toISOString().slice(0, 10),
-    howSeen: seen[check.how],
-  })
+  if (check?.outcome !== 'good') throw new Refusal('The work has not been checked yet.')
+  const at = new Map(order.hazards.map(hazard => [hazard.anchorId, hazard]))
+  for (const [anchorId, { cragId, climbId }] of at)
+    if (anchorId !== null)
+      await recordCheck(tx, act, {
+        ...{ cragId, climbId, anchorId },
+        personId: check.by,
+        seenOn: toDay(check.at, order.timeZone),
+        howSeen: seen[check.how],
+      })
 }
 
 async function thankReporters(
@@ -107,10 +108,7 @@ export async function closeOrder(
 ) {
   const { orderId, act, links } = given
   return await inCommand(db, async tx => {
-    const before = await findOrderById(tx, orderId)
-    if (before === null) throw new Refusal('This order is no longer on record.')
-    const anchorIds = await lockAnchors(tx, before.hazards)
-    const order = await requireOrder(tx, orderId)
+    const { order, anchorIds } = await requireWork(tx, orderId)
     await moveOrder(tx, act, order, 'closed', { verb: 'closed', set: { closedAt: act.now }, public: true })
     const record = await findRecord(tx, orderId)
     if (record === null) throw new Refusal('Nothing has been recorded for this order yet.')
@@ -126,9 +124,9 @@ export async function closeOrder(
     for (const hazard of order.hazards) {
       await moveHazard(tx, act, hazard.id, { from: ['mended'], to: 'cleared', verb: 'cleared' })
       await clearFindings(tx, act, { hazardId: hazard.id, byRecordId: record.id })
-      await putCheckOnRecord(tx, act, hazard, record)
       await thankReporters(tx, act, hazard, record, shown[0] ?? null, links)
     }
+    await putCheckOnRecord(tx, act, order, record)
     await endFirstWarnings(tx, act, {
       hazardIds: order.hazards.map(hazard => hazard.id),
       appUrl: links.appUrl,

@@ -12,6 +12,10 @@ export async function expireOffers(db: Database, act: Act, appUrl: string): Prom
     .from(offers)
     .where(and(eq(offers.state, 'sent'), lte(offers.expiresAt, act.now)))
     .limit(20)
-  for (const offer of over) await inTransaction(db, tx => endOffer(tx, act, offer, 'expired', null, appUrl))
-  return over.length
+  let ended = 0
+  for (const offer of over) {
+    const to = { to: 'expired', words: null, appUrl } as const
+    if (await inTransaction(db, tx => endOffer(tx, act, offer, to))) ended += 1
+  }
+  return ended
 }

@@ -4,10 +4,12 @@ import { offers } from '~/db/schema/work'
 import { inCommand, Refusal } from '~/db/transaction.server'
 import { queueMail } from '~/mail/outbox.server'
 import type { Act } from '~/record/act'
+import { requireOrder } from './lock.server'
 import { toCancelledMail } from './mails'
-import { moveOrder, requireOrder } from './move.server'
-import { tellMaker } from './offer.server'
-import { findAddress } from './order-details.server'
+import { moveOrder } from './move.server'
+import { endSheets } from './sheets.server'
+import { tellMaker } from './tell.server'
+import { findAddress } from './workers.server'
 
 /** The worker gives an accepted job back, with a word why; it is a draft again and its maker hears of it. */
 export async function handBack(
@@ -19,7 +21,8 @@ export async function handBack(
     const order = await requireOrder(tx, orderId)
     if (order.state === 'accepted' && order.workerId !== act.by.personId)
       throw new Refusal('Only whoever has accepted the job can hand it back.')
-    await moveOrder(tx, act, order, 'draft', { verb: 'handed_back', set: { workerId: null } })
+    await moveOrder(tx, act, order, 'draft', { verb: 'handed_back', set: { workerId: null }, words })
+    await endSheets(tx, act, orderId)
     await tellMaker(tx, act, order, {
       key: `${orderId}:${act.now.getTime()}`,
       who,
@@ -36,6 +39,7 @@ export async function cancelOrder(db: Database, { orderId, act }: { orderId: str
   return await inCommand(db, async tx => {
     const order = await requireOrder(tx, orderId)
     await moveOrder(tx, act, order, 'cancelled', { verb: 'cancelled' })
+    await endSheets(tx, act, orderId)
     const live = await tx
       .select({ id: offers.id, personId: offers.personId })
       .from(offers)

@@ -1,5 +1,6 @@
 import { renderMail } from '~/mail/layout'
 import type { Message } from '~/mail/message'
+import { workCaution } from './words'
 
 interface To {
   id: string
@@ -37,7 +38,7 @@ export function toOfferMail(
     subject: `A job for you? ${mail.title}`,
     ...renderMail({
       heading: `${mail.name}, can you do this job?`,
-      paragraphs: [`${mail.from} offers you: ${mail.title}.`, mail.what],
+      paragraphs: [`${mail.from} offers you: ${mail.title}.`, mail.what, workCaution],
       table: { rows: mail.rows },
       button: { words: 'See the job, accept or decline', url: mail.url },
       footer: ['The link speaks for you and opens this offer only. Do not pass it on.'],
@@ -58,6 +59,7 @@ export function toSheetMail(
       heading: 'Thank you. The job is yours',
       paragraphs: [
         'The sheet below can be printed and works on paper. When it is done, record it from there.',
+        workCaution,
       ],
       table: { rows: mail.rows },
       button: { words: 'Open the job sheet', url: mail.url },

@@ -6,23 +6,18 @@ import { findMove } from '~/lib/moves'
 import type { Act } from '~/record/act'
 import { writeActivity } from '~/record/activities.server'
 import { type OrderState, orderMoves, orderStateWords } from './order'
-import { findOrderById, type Order } from './orders.server'
+import type { Order } from './orders.server'
 
-/** The order as it stands, its row locked for the rest of the transaction. */
-export async function requireOrder(tx: Transaction, orderId: string): Promise<Order> {
-  await tx.select({ id: orders.id }).from(orders).where(eq(orders.id, orderId)).for('update')
-  const order = await findOrderById(tx, orderId)
-  if (order === null) throw new Refusal('This order is no longer on record.')
-  return order
-}
-
-/** Moves an order by the table of moves and writes the line of record; refuses naming what it is now. */
+/**
+ * Moves an order, locked before, by the table of moves and writes the line of record; refuses naming what it is now.
+ * `words` are what somebody said with it.
+ */
 export async function moveOrder(
   tx: Transaction,
   act: Act,
   order: Order,
   to: OrderState,
-  move: { verb: string; set?: Partial<typeof orders.$inferInsert>; public?: boolean },
+  move: { verb: string; set?: Partial<typeof orders.$inferInsert>; public?: boolean; words?: string },
 ): Promise<void> {
   if (findMove(orderMoves, order.state, to) === null)
     throw new Refusal(
@@ -38,5 +33,6 @@ export async function moveOrder(
     subjectId: order.id,
     cragId: order.cragId,
     public: move.public ?? false,
+    details: move.words === undefined ? undefined : { words: move.words },
   })
 }

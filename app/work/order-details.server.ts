@@ -1,6 +1,6 @@
-import { and, asc, desc, eq, isNull } from 'drizzle-orm'
+import { asc, desc, eq } from 'drizzle-orm'
 import type { Queryable } from '~/db/client.server'
-import { membershipRoles, memberships, people } from '~/db/schema/people'
+import { people } from '~/db/schema/people'
 import { offers, orderParts, workChecks, workParts, workRecords } from '~/db/schema/work'
 
 /** The parts an order needs. */
@@ -85,33 +85,11 @@ export async function findRecord(db: Queryable, orderId: string) {
   return { ...record, fitted, checks }
 }
 
-/** The organisation's rebolters, of age, whom a job can be offered to. */
-export async function listRebolters(db: Queryable, organisationId: string) {
+/** Everybody who ever recorded work on an order. */
+export async function listRecorders(db: Queryable, orderId: string): Promise<string[]> {
   const rows = await db
-    .selectDistinct({ id: people.id, name: people.name, email: people.email })
-    .from(memberships)
-    .innerJoin(membershipRoles, eq(membershipRoles.membershipId, memberships.id))
-    .innerJoin(people, eq(people.id, memberships.personId))
-    .where(
-      and(
-        eq(memberships.organisationId, organisationId),
-        isNull(memberships.endedAt),
-        eq(membershipRoles.role, 'rebolter'),
-        eq(people.over18, true),
-      ),
-    )
-    .orderBy(asc(people.name))
-    .limit(200)
-  return rows.flatMap(row => (row.email === null ? [] : [{ ...row, email: row.email }]))
-}
-
-/** A person's name and address for a mail, or null once erased. */
-export async function findAddress(db: Queryable, personId: string | null) {
-  if (personId === null) return null
-  const [row] = await db
-    .select({ id: people.id, name: people.name, email: people.email })
-    .from(people)
-    .where(eq(people.id, personId))
-    .limit(1)
-  return row?.email == null ? null : { ...row, email: row.email }
+    .selectDistinct({ by: workRecords.by })
+    .from(workRecords)
+    .where(eq(workRecords.orderId, orderId))
+  return rows.map(row => row.by)
 }

@@ -33,6 +33,15 @@ export const orderMoves: readonly Move<OrderState, Action>[] = [
   { from: 'accepted', to: 'cancelled', may: 'order:manage' },
 ]
 
+/** Orders in these states are under way: their hazard needs no other. */
+export const liveStates = [
+  'draft',
+  'offered',
+  'accepted',
+  'done',
+  'checked',
+] as const satisfies readonly OrderState[]
+
 export const offerStates = ['sent', 'accepted', 'declined', 'expired', 'withdrawn'] as const
 export type OfferState = (typeof offerStates)[number]
 

@@ -1,11 +1,12 @@
-import { and, asc, desc, eq, inArray, ne } from 'drizzle-orm'
+import { and, desc, eq, inArray } from 'drizzle-orm'
 import type { Queryable } from '~/db/client.server'
-import { anchors, areas, crags } from '~/db/schema/crags'
+import { areas, crags } from '~/db/schema/crags'
 import { organisations } from '~/db/schema/people'
 import { orderHazards, orders } from '~/db/schema/work'
 import type { Viewer } from '~/people/viewer'
 import { type Hazard, listHazardsById } from '~/reports/hazards.server'
 import { jobKindWords } from './job'
+import { liveStates } from './order'
 
 /** The organisations whose orders the viewer may see. */
 export function listWorkingFor(viewer: Viewer): string[] {
@@ -106,6 +107,17 @@ export async function listOrdersOf(db: Queryable, hazardId: string) {
     .limit(50)
 }
 
+/** The order under way for a hazard, or null. */
+export async function findLiveOrder(db: Queryable, hazardId: string) {
+  const [row] = await db
+    .select({ code: orders.code, state: orders.state })
+    .from(orderHazards)
+    .innerJoin(orders, eq(orders.id, orderHazards.orderId))
+    .where(and(eq(orderHazards.hazardId, hazardId), inArray(orders.state, liveStates)))
+    .limit(1)
+  return row ?? null
+}
+
 /** The order of an id with its hazards, whoever asks: for commands and mailed links. Else null. */
 export async function findOrderById(db: Queryable, id: string) {
   const [row] = await withHazards(db, await selectOrders(db).where(eq(orders.id, id)).limit(1))
@@ -125,17 +137,4 @@ export async function findOrder(db: Queryable, viewer: Viewer, code: string): Pr
       .limit(1),
   )
   return row ?? null
-}
-
-/** Locks the fixed points of an order's hazards, lowest id first: the first thing every command of work does. */
-export async function lockAnchors(tx: Queryable, hazards: Pick<Hazard, 'anchorId'>[]): Promise<string[]> {
-  const ids = [...new Set(hazards.flatMap(hazard => hazard.anchorId ?? []))].sort()
-  if (ids.length > 0)
-    await tx
-      .select({ id: anchors.id })
-      .from(anchors)
-      .where(and(inArray(anchors.id, ids), ne(anchors.life, 'removed')))
-      .orderBy(asc(anchors.id))
-      .for('update')
-  return ids
 }

@@ -1,7 +1,6 @@
-import { eq } from 'drizzle-orm'
-import type { Material, PartKind, Side } from '~/crags/part'
-import type { Database, Transaction } from '~/db/client.server'
-import { workParts, workRecords } from '~/db/schema/work'
+import { and, eq } from 'drizzle-orm'
+import type { Database, Queryable, Transaction } from '~/db/client.server'
+import { workRecords } from '~/db/schema/work'
 import { inCommand, isDuplicate, Refusal } from '~/db/transaction.server'
 import { queueMail } from '~/mail/outbox.server'
 import type { Act } from '~/record/act'
@@ -9,21 +8,13 @@ import { writeActivity } from '~/record/activities.server'
 import { moveHazard } from '~/reports/hazards.server'
 import { claimPhotos } from '~/reports/photos.server'
 import { refreshAnchors } from '~/reports/refresh.server'
+import { type FittedPart, insertFitted } from './fitted.server'
+import { requireWork } from './lock.server'
 import { toCheckDueMail } from './mails'
-import { moveOrder, requireOrder } from './move.server'
-import { tellMaker } from './offer.server'
-import { listRebolters } from './order-details.server'
-import { findOrderById, lockAnchors, type Order } from './orders.server'
-
-/** One part fitted, in the place of another or beside what is there. */
-export interface FittedPart {
-  replaces: string | null
-  side: Side | null
-  kind: PartKind
-  material: Material
-  sizeMm: number | null
-  marking: string | null
-}
+import { moveOrder } from './move.server'
+import type { Order } from './orders.server'
+import { tellMaker } from './tell.server'
+import { listRebolters } from './workers.server'
 
 export interface NewRecord {
   orderId: string
@@ -36,16 +27,26 @@ export interface NewRecord {
   noPhotoReason: string | null
   photoKeys: string[]
   stagedBy: string | null
+  /** everything fitted by this order, also what an earlier record of it that came back named */
   fitted: FittedPart[]
   /** who records, for the mail to the coordinator */
   who: string
 }
 
-async function findRecorded(tx: Pick<Transaction, 'select'>, clientKey: string): Promise<boolean> {
-  const rows = await tx
+type Given = NewRecord & { act: Act; appUrl: string }
+
+/** Whether this very form has been recorded already, by the same person for the same order. */
+async function isRecorded(db: Queryable, { clientKey, orderId, act }: Given): Promise<boolean> {
+  const rows = await db
     .select({ id: workRecords.id })
     .from(workRecords)
-    .where(eq(workRecords.clientKey, clientKey))
+    .where(
+      and(
+        eq(workRecords.clientKey, clientKey),
+        eq(workRecords.orderId, orderId),
+        eq(workRecords.by, act.by.personId!),
+      ),
+    )
     .limit(1)
   return rows.length > 0
 }
@@ -54,89 +55,60 @@ async function findRecorded(tx: Pick<Transaction, 'select'>, clientKey: string):
  * Records an accepted job as done: what was fitted, with a photo or a reason for none. Its hazards are mended and wait
  * for a check; the coordinator is told, and so are those who could check. The same client key records once.
  */
-export async function recordWork(db: Database, given: NewRecord & { act: Act; appUrl: string }) {
-  const { act, appUrl, ...record } = given
-  if (await findRecorded(db, record.clientKey)) return { ok: true as const }
+export async function recordWork(db: Database, given: Given) {
+  const { act } = given
+  if (await isRecorded(db, given)) return { ok: true as const }
   const done = inCommand(db, async tx => {
-    const before = await findOrderById(tx, record.orderId)
-    if (before === null) throw new Refusal('This order is no longer on record.')
-    const anchorIds = await lockAnchors(tx, before.hazards)
-    const order = await requireOrder(tx, record.orderId)
-    if (await findRecorded(tx, record.clientKey)) return {}
+    const { order, anchorIds } = await requireWork(tx, given.orderId)
+    if (await isRecorded(tx, given)) return {}
     if (order.state === 'accepted' && order.workerId !== act.by.personId)
       throw new Refusal(
         'Only whoever has accepted the job can record it. Ask the coordinator to offer it to you.',
       )
-    if (record.photoKeys.length === 0 && record.noPhotoReason === null)
-      throw new Refusal('Add a photo of the work, or say why there is none.')
     await moveOrder(tx, act, order, 'done', { verb: 'done', public: true })
-    const recordId = await insertRecord(tx, act, record, anchorIds[0] ?? null)
+    const [anchorId] = anchorIds
+    if (anchorId === undefined) throw new Refusal('Work off a fixed point cannot be recorded here yet.')
+    const recordId = await insertRecord(tx, given, anchorId)
     for (const hazard of order.hazards)
       await moveHazard(tx, act, hazard.id, { from: ['open', 'warned'], to: 'mended', verb: 'mended' })
     await refreshAnchors(tx, act, anchorIds)
-    await tellAll(tx, act, order, record, recordId, appUrl)
+    await tellAll(tx, order, given, recordId)
     return {}
   })
   return await done.catch(error => {
-    if (isDuplicate(error)) return { ok: true as const }
-    throw error
+    if (!isDuplicate(error)) throw error
+    const reason = 'This form was sent before, for another job. Open the record form of this job again.'
+    return isRecorded(db, given).then(same => (same ? { ok: true as const } : { ok: false as const, reason }))
   })
 }
 
-async function insertRecord(
-  tx: Transaction,
-  act: Act,
-  record: NewRecord,
-  anchorId: string | null,
-): Promise<string> {
-  if (anchorId === null) throw new Refusal('Work off a fixed point cannot be recorded here yet.')
+async function insertRecord(tx: Transaction, given: Given, anchorId: string): Promise<string> {
+  const { act, photoKeys: keys, stagedBy, fitted } = given
+  const { orderId, clientKey, doneOn, minutes, words, noPhotoReason } = given
   const id = act.newId()
+  const by = act.by.personId!
   await tx.insert(workRecords).values({
     id,
-    clientKey: record.clientKey,
-    orderId: record.orderId,
-    anchorId,
-    by: act.by.personId!,
-    doneOn: record.doneOn,
-    minutes: record.minutes,
-    words: record.words,
-    noPhotoReason: record.noPhotoReason,
+    ...{ orderId, clientKey, anchorId, by, doneOn, minutes, words, noPhotoReason },
     outcome: 'done',
     createdAt: act.now,
     updatedAt: act.now,
   })
-  for (const part of record.fitted)
-    await tx.insert(workParts).values({ id: act.newId(), workRecordId: id, ...part })
-  const { photoKeys: keys, stagedBy } = record
-  if (stagedBy !== null) await claimPhotos(tx, act, { keys, stagedBy, target: { workRecordId: id } })
+  await insertFitted(tx, act, { recordId: id, anchorId, fitted })
+  const target = { workRecordId: id }
+  const kept = stagedBy === null ? 0 : await claimPhotos(tx, act, { keys, stagedBy, target })
+  if (kept === 0 && noPhotoReason === null)
+    throw new Refusal('Add a photo of the work, or say why there is none, for example “the camera fell”.')
   await writeActivity(tx, act, { verb: 'mended', subjectKind: 'anchor', subjectId: anchorId, public: true })
   return id
 }
 
-async function tellAll(
-  tx: Transaction,
-  act: Act,
-  order: Order,
-  record: NewRecord,
-  recordId: string,
-  appUrl: string,
-) {
-  await tellMaker(tx, act, order, {
-    key: recordId,
-    who: record.who,
-    did: 'done',
-    words: record.words,
-    appUrl,
-  })
-  for (const to of await listRebolters(tx, order.organisationId)) {
-    if (to.id === act.by.personId) continue
-    const mail = toCheckDueMail({
-      orderId: order.id,
-      to,
-      title: order.title,
-      recordId,
-      url: `${appUrl}/orders/${order.code}`,
-    })
-    await queueMail(tx, act, mail)
-  }
+/** The coordinator hears that it is done; the organisation's other rebolters that a check is due. */
+async function tellAll(tx: Transaction, order: Order, given: Given, recordId: string): Promise<void> {
+  const { act, who, words, appUrl } = given
+  await tellMaker(tx, act, order, { key: recordId, who, did: 'done', words, appUrl })
+  const url = `${appUrl}/orders/${order.code}`
+  for (const to of await listRebolters(tx, order.organisationId))
+    if (to.id !== act.by.personId)
+      await queueMail(tx, act, toCheckDueMail({ orderId: order.id, to, title: order.title, recordId, url }))
 }

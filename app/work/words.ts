@@ -18,3 +18,16 @@ export const offerStateWords: Record<OfferState, string> = {
   expired: 'not answered in time',
   withdrawn: 'withdrawn',
 }
+
+/** Why an offer that is no longer open cannot be answered, kindly. */
+export const answeredWords: Record<Exclude<OfferState, 'sent'>, string> = {
+  accepted: 'You have accepted this job already. The sheet came by mail.',
+  declined: 'You have declined this job. If you can do it after all, tell the coordinator.',
+  expired:
+    'This offer has run out. If you can still do the job, tell the coordinator, who may offer it again.',
+  withdrawn: 'This job is no longer needed, or somebody else does it. Thank you all the same.',
+}
+
+/** The caution of every page and mail somebody works from. */
+export const workCaution =
+  'Work on fixed gear is for trained people, in twos, under local rules and with the owner’s consent. Never trust the gear you came to mend: rig from anchors of your own. The maker’s sheet comes first. This record does not certify any fixed gear.'

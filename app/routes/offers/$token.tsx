@@ -9,12 +9,13 @@ import { clockContext, databaseContext, settingsContext, wakeContext } from '~/w
 import { parseForm, readForm, toTyped } from '~/web/forms.server'
 import { keepTyped } from '~/web/keep-typed.server'
 import { invalid, notFound } from '~/web/responses'
-import { acceptOffer, answeredWords, declineOffer, findOffered } from '~/work/answer.server'
+import { acceptOffer, declineOffer, findOffered } from '~/work/answer.server'
 import { JobFacts } from '~/work/components/job-facts'
 import { WorkCaution } from '~/work/components/work-caution'
 import { maybeWordsSchema } from '~/work/order.schema'
 import { listNeededParts } from '~/work/order-details.server'
 import { findOrderById } from '~/work/orders.server'
+import { answeredWords } from '~/work/words'
 import type { Route } from './+types/$token'
 
 export const meta: Route.MetaFunction = () => [

@@ -25,9 +25,10 @@ import { cancelOrder, handBack } from '~/work/hand-back.server'
 import { offerOrder } from '~/work/offer.server'
 import { orderStateWords } from '~/work/order'
 import { closeSchema, offerSchema, wordsSchema } from '~/work/order.schema'
-import { findRecord, listNeededParts, listOffers, listRebolters } from '~/work/order-details.server'
+import { findRecord, listNeededParts, listOffers } from '~/work/order-details.server'
 import { findOrder } from '~/work/orders.server'
 import { checkerWords, checkMethodWords, offerStateWords } from '~/work/words'
+import { listRebolters } from '~/work/workers.server'
 import type { Route } from './+types/$code'
 
 export const meta: Route.MetaFunction = ({ loaderData }) => [

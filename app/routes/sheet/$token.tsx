@@ -9,12 +9,12 @@ import { toDrawnPoint, toZones } from '~/reports/drawn-line'
 import { Page } from '~/ui/page'
 import { clockContext, databaseContext } from '~/web/context'
 import { notFound } from '~/web/responses'
-import { findSheetOrder } from '~/work/answer.server'
 import { Fact, JobFacts } from '~/work/components/job-facts'
 import { WorkCaution } from '~/work/components/work-caution'
 import { orderStateWords } from '~/work/order'
 import { listNeededParts } from '~/work/order-details.server'
 import { findOrderById } from '~/work/orders.server'
+import { findSheetOrder } from '~/work/sheets.server'
 import type { Route } from './+types/$token'
 
 export const meta: Route.MetaFunction = () => [
@@ -24,7 +24,8 @@ export const meta: Route.MetaFunction = () => [
 
 export async function loader({ params, context }: Route.LoaderArgs) {
   const db = context.get(databaseContext)
-  const orderId = await findSheetOrder(db, params.token)
+  const now = context.get(clockContext)()
+  const orderId = await findSheetOrder(db, params.token, now)
   const order = orderId === null ? null : await findOrderById(db, orderId)
   if (order === null) throw notFound('This link opens no job sheet. Use the whole link from the mail.')
   if (order.state !== 'accepted')
@@ -32,7 +33,7 @@ export async function loader({ params, context }: Route.LoaderArgs) {
       `This sheet was for as long as the job went on. The order is ${orderStateWords[order.state]} now.`,
     )
   const [hazard] = order.hazards
-  const today = toDay(context.get(clockContext)(), order.timeZone)
+  const today = toDay(now, order.timeZone)
   const climb = hazard?.climbId == null ? null : await findClimbById(db, hazard.climbId, today)
   return {
     order: {

@@ -1,12 +1,7 @@
 import { Caution } from '~/ui/caution'
+import { workCaution } from '../words'
 
 /** The caution of every page somebody works from. */
 export function WorkCaution() {
-  return (
-    <Caution>
-      Work on fixed gear is for trained people, in twos, under local rules and with the owner’s consent. Never
-      trust the gear you came to mend: rig from anchors of your own. The maker’s sheet comes first. This
-      record does not certify any fixed gear.
-    </Caution>
-  )
+  return <Caution>{workCaution}</Caution>
 }

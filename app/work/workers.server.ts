@@ -1,0 +1,34 @@
+import { and, asc, eq, isNull } from 'drizzle-orm'
+import type { Queryable } from '~/db/client.server'
+import { membershipRoles, memberships, people } from '~/db/schema/people'
+
+/** The organisation's rebolters, of age, whom a job can be offered to. */
+export async function listRebolters(db: Queryable, organisationId: string) {
+  const rows = await db
+    .selectDistinct({ id: people.id, name: people.name, email: people.email })
+    .from(memberships)
+    .innerJoin(membershipRoles, eq(membershipRoles.membershipId, memberships.id))
+    .innerJoin(people, eq(people.id, memberships.personId))
+    .where(
+      and(
+        eq(memberships.organisationId, organisationId),
+        isNull(memberships.endedAt),
+        eq(membershipRoles.role, 'rebolter'),
+        eq(people.over18, true),
+      ),
+    )
+    .orderBy(asc(people.name))
+    .limit(200)
+  return rows.flatMap(row => (row.email === null ? [] : [{ ...row, email: row.email }]))
+}
+
+/** A person's name and address for a mail, or null once erased. */
+export async function findAddress(db: Queryable, personId: string | null) {
+  if (personId === null) return null
+  const [row] = await db
+    .select({ id: people.id, name: people.name, email: people.email })
+    .from(people)
+    .where(eq(people.id, personId))
+    .limit(1)
+  return row?.email == null ? null : { ...row, email: row.email }
+}
