@@ -1,7 +1,8 @@
-import { mkdtempSync } from 'node:fs'
+import { mkdtempSync, rmSync } from 'node:fs'
 import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import { and, eq } from 'drizzle-orm'
+import { afterAll } from 'vitest'
 import type { Database } from '~/db/client.server'
 import { anchors, climbAnchors, climbs } from '~/db/schema/crags'
 import { people } from '~/db/schema/people'
@@ -16,9 +17,12 @@ export const now = new Date('2027-05-02T12:00:00.000Z')
 
 export const links = { appUrl: 'http://127.0.0.1:3000', toStatusSecret: (id: string) => `secret-${id}` }
 
+/** The photos of one test file, gone when it is done. */
+export const photoDir = mkdtempSync(join(tmpdir(), 'cragfettle-photos-'))
+afterAll(() => rmSync(photoDir, { recursive: true, force: true }))
+
 /** Puts the demo of Skerrow in an empty database. */
 export async function seedDemo(url: string): Promise<{ photoDir: string }> {
-  const photoDir = mkdtempSync(join(tmpdir(), 'photos-'))
   await seed({ databaseUrl: url, photoDir, now })
   return { photoDir }
 }

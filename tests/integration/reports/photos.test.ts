@@ -1,7 +1,6 @@
-import { existsSync, mkdirSync, mkdtempSync, readdirSync, writeFileSync } from 'node:fs'
+import { existsSync, mkdirSync, readdirSync, writeFileSync } from 'node:fs'
 import { createServer } from 'node:http'
 import type { AddressInfo } from 'node:net'
-import { tmpdir } from 'node:os'
 import { join } from 'node:path'
 import express from 'express'
 import sharp from 'sharp'
@@ -14,10 +13,9 @@ import { claimPhotos, listStaged, sweepStaged } from '~/reports/photos.server'
 import { takeUploads } from '~/reports/uploads.server'
 import type { Uploads } from '~/reports/uploads-context'
 import { testDatabase } from '../database'
-import { actBy, now } from '../demo'
+import { actBy, now, photoDir } from '../demo'
 
 const { db, empty } = await testDatabase()
-const photoDir = mkdtempSync(join(tmpdir(), 'photos-'))
 mkdirSync(join(photoDir, 'incoming'), { recursive: true })
 const day = 86_400_000
 
