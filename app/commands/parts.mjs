@@ -149,10 +149,14 @@ function showTelling(title) {
  */
 async function withReport(work) {
   const folder = mkdtempSync(join(tmpdir(), 'cragfettle-report-'))
+  const remove = () => rmSync(folder, { recursive: true, force: true })
+  // a run that is interrupted comes to no end of its own
+  process.once('exit', remove)
   try {
     return await work(join(folder, 'report.json'))
   } finally {
-    rmSync(folder, { recursive: true, force: true })
+    process.off('exit', remove)
+    remove()
   }
 }
 

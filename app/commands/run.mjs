@@ -10,9 +10,11 @@ const running = new Set()
 
 /** how long a program may take to put its own things away */
 const patience = 20_000
+let isEnding = false
 
-/** Asks every program that still runs to end, and waits a while for it. */
+/** Asks every program that still runs to end, and waits a while for it. From then on no other is begun. */
 export async function endRunning() {
+  isEnding = true
   if (running.size === 0) return
   const ended = Promise.all([...running].map(child => once(child, 'close')))
   for (const child of running) child.kill('SIGTERM')
@@ -21,14 +23,20 @@ export async function endRunning() {
 
 /**
  * Runs a program to its end and gives its exit code (null when it could not start or was killed) and all it wrote;
- * `onLine` gets each line as it comes.
+ * `onLine` gets each line as it comes. There is no answer once everything is being ended: whoever waits for it must not
+ * go on to the next thing.
  * @param {string} program
  * @param {string[]} given
  * @param {{ onLine?: (line: string) => void, env?: Record<string, string | undefined>, cwd?: string }} [options]
  * @returns {Promise<Ended>}
  */
 export function runToEnd(program, given, { onLine = () => {}, env = {}, cwd } = {}) {
-  return new Promise(done => {
+  return new Promise(settle => {
+    /** @param {Ended} ended */
+    const done = ended => {
+      if (!isEnding) settle(ended)
+    }
+    if (isEnding) return
     const child = spawn(program, given, {
       cwd,
       env: { ...process.env, ...env },
