@@ -14,7 +14,7 @@ import type { CheckerKind, CheckMethod } from './order'
 import { findRecord, listRecorders } from './order-details.server'
 import type { Order } from './orders.server'
 import { tellMaker } from './tell.server'
-import { findAddress } from './workers.server'
+import { findAddress, requireWorking } from './workers.server'
 
 export interface NewCheck {
   orderId: string
@@ -53,6 +53,7 @@ export async function checkWork(db: Database, given: Given) {
     const { order, anchorIds } = await requireWork(tx, orderId)
     const returned = check.outcome === 'returned'
     const did = returned ? 'returned' : 'checked'
+    await requireWorking(tx, order, act.by.personId, 'Another checks this work.')
     const record = await requireCheckable(tx, given)
     await moveOrder(tx, act, order, returned ? 'accepted' : 'checked', { verb: did, public: true })
     await tx

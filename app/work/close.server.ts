@@ -1,8 +1,9 @@
-import { and, eq, isNull } from 'drizzle-orm'
+import { and, eq, inArray, isNull } from 'drizzle-orm'
 import { formatPart } from '~/crags/part'
 import { addPart } from '~/crags/places.server'
 import type { Database, Transaction } from '~/db/client.server'
 import { parts } from '~/db/schema/parts'
+import { findings, reports } from '~/db/schema/reports'
 import { inCommand, Refusal } from '~/db/transaction.server'
 import { toDay } from '~/lib/dates'
 import { queueMail } from '~/mail/outbox.server'
@@ -25,16 +26,34 @@ import { type Order, toPlace } from './orders.server'
 
 type Recorded = NonNullable<Awaited<ReturnType<typeof findRecord>>>
 
+/** What stood on record, without a hazard, about a part that was taken out goes with the part. */
+async function clearFindingsOfPart(
+  tx: Transaction,
+  act: Act,
+  { partId, byRecordId }: { partId: string; byRecordId: string },
+): Promise<void> {
+  const onRecord = tx
+    .select({ id: reports.id })
+    .from(reports)
+    .where(and(eq(reports.state, 'on_record'), isNull(reports.hazardId)))
+  await tx
+    .update(findings)
+    .set({ clearedAt: act.now, clearedByRecord: byRecordId })
+    .where(and(eq(findings.partId, partId), isNull(findings.clearedAt), inArray(findings.reportId, onRecord)))
+}
+
 /** Takes replaced parts off the record and puts on it what was fitted, from the day of the work. */
 async function renewParts(tx: Transaction, act: Act, record: Recorded): Promise<void> {
   for (const fitted of record.fitted) {
-    if (fitted.replaces !== null)
+    if (fitted.replaces !== null) {
       await tx
         .update(parts)
         .set({ removedOn: record.doneOn, removedByRecord: record.id, updatedAt: act.now })
         .where(
           and(eq(parts.id, fitted.replaces), eq(parts.anchorId, record.anchorId), isNull(parts.removedOn)),
         )
+      await clearFindingsOfPart(tx, act, { partId: fitted.replaces, byRecordId: record.id })
+    }
     if (fitted.kind === null) continue
     await addPart(tx, act, record.anchorId, {
       kind: fitted.kind,

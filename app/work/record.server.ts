@@ -14,7 +14,7 @@ import { toCheckDueMail } from './mails'
 import { moveOrder } from './move.server'
 import type { Order } from './orders.server'
 import { tellMaker } from './tell.server'
-import { listRebolters } from './workers.server'
+import { listRebolters, requireWorking } from './workers.server'
 
 export interface NewRecord {
   orderId: string
@@ -65,6 +65,7 @@ export async function recordWork(db: Database, given: Given) {
       throw new Refusal(
         'Only whoever has accepted the job can record it. Ask the coordinator to offer it to you.',
       )
+    await requireWorking(tx, order, act.by.personId, 'Tell its coordinator what was done.')
     await moveOrder(tx, act, order, 'done', { verb: 'done', public: true })
     const [anchorId] = anchorIds
     if (anchorId === undefined) throw new Refusal('Work off a fixed point cannot be recorded here yet.')
