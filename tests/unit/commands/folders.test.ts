@@ -10,27 +10,27 @@ beforeEach(() => {
 })
 afterEach(() => rmSync(top, { recursive: true }))
 
-const require = (dataDir: string, photoDir = join(dataDir, 'photos')) =>
+const prepare = (dataDir: string, photoDir = join(dataDir, 'photos')) =>
   requireFolders({ dataDir, photoDir, databaseUrl: null })
 
 test('the folders of an installation are made, for their owner alone', async () => {
-  await require(join(top, 'a/b'))
+  await prepare(join(top, 'a/b'))
   expect(statSync(join(top, 'a/b')).mode & 0o777).toBe(0o700)
   expect(existsSync(join(top, 'a/b/photos'))).toBe(true)
 })
 
 test('folders that are there are taken as they are', async () => {
-  await require(top)
-  await expect(require(top)).resolves.toBeUndefined()
+  await prepare(top)
+  await expect(prepare(top)).resolves.toBeUndefined()
 })
 
 test('a file in the place of a folder is named, with an example', async () => {
   const file = join(top, 'file')
   writeFileSync(file, '')
-  await expect(require(file)).rejects.toThrow(/^DATA_DIR is ".*file", but there is a file .*DATA_DIR=\.data$/)
-  await expect(require(top, join(file, 'photos'))).rejects.toThrow(/^PHOTO_DIR is ".*PHOTO_DIR=/)
+  await expect(prepare(file)).rejects.toThrow(/^DATA_DIR is ".*file", but there is a file .*DATA_DIR=\.data$/)
+  await expect(prepare(top, join(file, 'photos'))).rejects.toThrow(/^PHOTO_DIR is ".*PHOTO_DIR=/)
 })
 
 test('a place where no folder can be made is refused at once', async () => {
-  await expect(require('/proc/cragfettle')).rejects.toThrow(/^DATA_DIR is "\/proc\/cragfettle", but/)
+  await expect(prepare('/proc/cragfettle')).rejects.toThrow(/^DATA_DIR is "\/proc\/cragfettle", but/)
 })
