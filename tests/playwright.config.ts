@@ -33,8 +33,8 @@ export default defineConfig({
     { name: 'desktop', use: { viewport: { width: 1280, height: 800 } } },
     {
       name: 'phone',
-      // the same at every size: answers by role, the bundle, the outbox
-      testIgnore: /(permission-matrix|bundle|mail-away)/,
+      // the same at every size: answers by role, the bundle, the outbox, the commands
+      testIgnore: /(permission-matrix|bundle|mail-away|commands)/,
       use: { viewport: { width: 390, height: 844 }, hasTouch: true, isMobile: true },
     },
   ],
