@@ -1,12 +1,12 @@
 import type { Material, PartKind } from '~/crags/part'
-import type { Database } from '~/db/client.server'
+import type { Database, Queryable } from '~/db/client.server'
 import { orderHazards, orderParts, orders } from '~/db/schema/work'
 import { inCommand, Refusal } from '~/db/transaction.server'
 import { formatCode, toCode } from '~/lib/code'
 import type { Act } from '~/record/act'
 import { writeActivity } from '~/record/activities.server'
 import { hazardStateWords } from '~/reports/hazard'
-import { listHazardsById } from '~/reports/hazards.server'
+import { type Hazard, listHazardsById } from '~/reports/hazards.server'
 import { findConsentFault } from './consent'
 import type { JobKind } from './job'
 import { lockHazards } from './lock.server'
@@ -24,6 +24,16 @@ export interface NewOrder {
   parts: { kind: PartKind; material: Material; sizeMm: number | null; quantity: number }[]
 }
 
+/** Why a hazard takes no order now, whatever the form says, or null. */
+export async function findObstacle(db: Queryable, hazard: Hazard): Promise<string | null> {
+  if (hazard.state !== 'open' && hazard.state !== 'warned')
+    return `This hazard is ${hazardStateWords[hazard.state]} now, so no order is needed for it.`
+  const live = await findLiveOrder(db, hazard.id)
+  if (live !== null)
+    return `Order ${formatCode(live.code)} stands for this hazard already and is ${orderStateWords[live.state]}. Go on with that one.`
+  return hazard.consent === 'disputed' ? findConsentFault(hazard.consent, null) : null
+}
+
 /**
  * Makes an order to clear one open hazard that no other order stands for. Refused while the owner disputes work there;
  * where consent is not known a written reason is asked, which prints on the sheet.
@@ -33,15 +43,10 @@ export async function makeOrder(db: Database, { act, ...order }: NewOrder & { ac
     await lockHazards(tx, [order.hazardId])
     const [hazard] = await listHazardsById(tx, [order.hazardId])
     if (hazard === undefined) throw new Refusal('This hazard is no longer on record.')
-    if (hazard.state !== 'open' && hazard.state !== 'warned')
-      throw new Refusal(`This hazard is ${hazardStateWords[hazard.state]} now, so no order is needed for it.`)
+    const obstacle = await findObstacle(tx, hazard)
+    if (obstacle !== null) throw new Refusal(obstacle)
     const fault = findConsentFault(hazard.consent, order.consentReason)
     if (fault !== null) throw new Refusal(fault)
-    const live = await findLiveOrder(tx, hazard.id)
-    if (live !== null)
-      throw new Refusal(
-        `Order ${formatCode(live.code)} stands for this hazard already and is ${orderStateWords[live.state]}. Go on with that one.`,
-      )
     const id = act.newId()
     const code = toCode(hazard.areaCode, act.random)
     await tx.insert(orders).values({

@@ -1,4 +1,4 @@
-import type { Move } from '~/lib/moves'
+import { findMove, type Move } from '~/lib/moves'
 import type { Action } from '~/people/permission'
 
 export const orderStates = ['draft', 'offered', 'accepted', 'done', 'checked', 'closed', 'cancelled'] as const
@@ -32,6 +32,12 @@ export const orderMoves: readonly Move<OrderState, Action>[] = [
   { from: 'offered', to: 'cancelled', may: 'order:manage' },
   { from: 'accepted', to: 'cancelled', may: 'order:manage' },
 ]
+
+/** Whether a person, by what they may do there, can move an order so; what happens by itself nobody can. */
+export function canMoveOrder(from: OrderState, to: OrderState, may: (action: Action) => boolean): boolean {
+  const move = findMove(orderMoves, from, to)
+  return move !== null && move.may !== 'system' && may(move.may)
+}
 
 /** Orders in these states are under way: their hazard needs no other. */
 export const liveStates = [

@@ -28,6 +28,19 @@ export const answeredWords: Record<Exclude<OfferState, 'sent'>, string> = {
   withdrawn: 'This job is no longer needed, or somebody else does it. Thank you all the same.',
 }
 
+/** The boxes of a record of work, the same on the form and on the printed sheet. */
+export const recordLabels = {
+  doneOn: 'Done on',
+  minutes: 'Minutes on the wall',
+  kind: 'Part',
+  material: 'Material',
+  sizeMm: 'Bar, in mm',
+  replaces: 'In the place of',
+  marking: 'Stamped on it',
+  words: 'In your words',
+  noPhotoReason: 'No photo? Say why',
+} as const
+
 /** The caution of every page and mail somebody works from. */
 export const workCaution =
   'Work on fixed gear is for trained people, in twos, under local rules and with the owner’s consent. Never trust the gear you came to mend: rig from anchors of your own. The maker’s sheet comes first. This record does not certify any fixed gear.'

@@ -8,7 +8,7 @@ import { formatMoment, formatZone } from '~/ui/when'
 import { clockContext, databaseContext, settingsContext, wakeContext } from '~/web/context'
 import { parseForm, readForm, toTyped } from '~/web/forms.server'
 import { keepTyped } from '~/web/keep-typed.server'
-import { invalid, notFound } from '~/web/responses'
+import { notFound } from '~/web/responses'
 import { acceptOffer, declineOffer, findOffered } from '~/work/answer.server'
 import { JobFacts } from '~/work/components/job-facts'
 import { WorkCaution } from '~/work/components/work-caution'
@@ -36,7 +36,8 @@ async function requireOffer({ params, context }: Pick<Route.LoaderArgs, 'params'
 export async function loader({ params, context }: Route.LoaderArgs) {
   const { db, offer, order } = await requireOffer({ params, context })
   const { cragName, approach, aimOn, what, consentReason, hazards, title, organisation, timeZone } = order
-  return {
+  const gone = ['declined', 'expired', 'withdrawn'].includes(offer.state)
+  const shown = {
     name: offer.name,
     state: offer.state,
     expiresAt: offer.expiresAt,
@@ -61,6 +62,8 @@ export async function loader({ params, context }: Route.LoaderArgs) {
     needed: await listNeededParts(db, order.id),
     consent: (await findConsent(db, order.cragId))?.conditions ?? null,
   }
+  // 410: there was an offer here, and it is over for good
+  return data(shown, { status: gone ? 410 : 200 })
 }
 
 interface Answered {
@@ -68,10 +71,14 @@ interface Answered {
   sheetUrl: string | null
   reason: string | null
   errors: Record<string, string>
+  words: string
 }
 
 const answered = (body: Partial<Answered>, status = 200) =>
-  data<Answered>({ accepted: false, sheetUrl: null, reason: null, errors: {}, ...body }, { status })
+  data<Answered>(
+    { accepted: false, sheetUrl: null, reason: null, errors: {}, words: '', ...body },
+    { status },
+  )
 
 export async function action({ request, params, context }: Route.ActionArgs) {
   const form = await readForm(request)
@@ -92,7 +99,7 @@ export async function action({ request, params, context }: Route.ActionArgs) {
         : answered({ reason: done.reason }, 409)
     }
     const parsed = parseForm(maybeWordsSchema, form)
-    if (!parsed.ok) return answered({ errors: invalid(parsed).data.errors }, 400)
+    if (!parsed.ok) return answered({ errors: parsed.errors, words: String(typed.words ?? '') }, 400)
     const done = await declineOffer(db, { ...given, words: parsed.value.words ?? null })
     context.get(wakeContext)()
     return done.ok ? answered({}) : answered({ reason: done.reason }, 409)
@@ -133,6 +140,7 @@ export default function Offer({ loaderData, actionData }: Route.ComponentProps) 
               label="Cannot do it? A word, if you like"
               name="words"
               rows={2}
+              defaultValue={actionData?.words}
               error={actionData?.errors.words}
             />
             <p className="mt-3">

@@ -1,6 +1,4 @@
 import { Form, redirect, useNavigation } from 'react-router'
-import { requireCragSubject } from '~/crags/crags.server'
-import { parseCode } from '~/lib/code'
 import { requireCan, requirePerson } from '~/people/guards.server'
 import { viewerContext } from '~/people/viewer-context'
 import { toAct } from '~/record/acts.server'
@@ -14,14 +12,14 @@ import { Page } from '~/ui/page'
 import { clockContext, databaseContext, settingsContext, wakeContext } from '~/web/context'
 import { parseForm, readForm, toTyped } from '~/web/forms.server'
 import { keepTyped } from '~/web/keep-typed.server'
-import { invalid, notFound, refuse } from '~/web/responses'
+import { invalid, refuse } from '~/web/responses'
 import { checkWork } from '~/work/check.server'
 import { WorkCaution } from '~/work/components/work-caution'
+import { requireOrderOf } from '~/work/guards.server'
 import { checkerKinds, checkMethods } from '~/work/order'
-import { checkSchema } from '~/work/order.schema'
-import { findRecord } from '~/work/order-details.server'
-import { findOrder } from '~/work/orders.server'
+import { findRecord, listRecorders } from '~/work/order-details.server'
 import { checkerWords, checkMethodWords } from '~/work/words'
+import { checkSchema } from '~/work/work.schema'
 import type { Route } from './+types/$code.check'
 
 export const meta: Route.MetaFunction = () => [{ title: 'Check the work · Cragfettle' }]
@@ -33,10 +31,8 @@ async function requireWork({
 }: Pick<Route.LoaderArgs, 'request' | 'params' | 'context'>) {
   const db = context.get(databaseContext)
   const viewer = requirePerson(context.get(viewerContext), request)
-  const code = parseCode(params.code)
-  const order = code === null ? null : await findOrder(db, viewer, code)
-  if (order === null) throw notFound('No order of your organisation carries this code.')
-  requireCan(viewer, 'check:make', await requireCragSubject(db, order.cragId), { seen: true })
+  const { order, subject } = await requireOrderOf(db, viewer, params.code)
+  requireCan(viewer, 'check:make', subject, { seen: true })
   return { db, viewer, order }
 }
 
@@ -45,7 +41,7 @@ export async function loader(args: Route.LoaderArgs) {
   const record = await findRecord(db, order.id)
   return {
     order: { code: order.code, title: order.title, state: order.state },
-    own: record?.by === viewer.person.id,
+    own: (await listRecorders(db, order.id)).includes(viewer.person.id),
     words: record?.words ?? null,
     photos: record === null ? [] : await listPhotos(db, { workRecordIds: [record.id] }),
   }

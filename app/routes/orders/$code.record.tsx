@@ -1,32 +1,31 @@
 import { randomBytes } from 'node:crypto'
-import { Form, redirect, useNavigation } from 'react-router'
-import { listParts } from '~/crags/anchors.server'
-import { requireCragSubject } from '~/crags/crags.server'
-import { formatPart } from '~/crags/part'
-import { parseCode } from '~/lib/code'
+import { data, Form, redirect, useNavigation } from 'react-router'
 import { toDay } from '~/lib/dates'
 import { requireCan, requirePerson } from '~/people/guards.server'
 import { viewerContext } from '~/people/viewer-context'
 import { toAct } from '~/record/acts.server'
 import { PhotoField } from '~/reports/components/photo-field'
-import { readPhotoForm } from '~/reports/photo-form.server'
+import { type PhotoForm, type PhotoFormAnswer, readPhotoForm } from '~/reports/photo-form.server'
 import '~/reports/reports.css'
 import { uploadsContext } from '~/reports/uploads-context'
 import { Button } from '~/ui/button'
-import { DateField, Field, Select, TextArea } from '~/ui/field'
+import { DateField, Field, TextArea } from '~/ui/field'
 import { FormErrors } from '~/ui/form-errors'
 import { Page } from '~/ui/page'
 import { clockContext, databaseContext, settingsContext, wakeContext } from '~/web/context'
 import { parseForm } from '~/web/forms.server'
 import { keepTyped } from '~/web/keep-typed.server'
-import { notFound } from '~/web/responses'
-import { PartFields } from '~/work/components/part-fields'
+import { FirstButton } from '~/work/components/first-button'
+import { PartRows } from '~/work/components/part-rows'
 import { WorkCaution } from '~/work/components/work-caution'
+import { listInPlace } from '~/work/fitted.server'
+import { requireOrderOf } from '~/work/guards.server'
 import { orderStateWords } from '~/work/order'
-import { toRecordSchema } from '~/work/order.schema'
-import { listNeededParts } from '~/work/order-details.server'
-import { findOrder } from '~/work/orders.server'
+import { findRecord, listNeededParts } from '~/work/order-details.server'
+import { toPartChoices, toPresetRows, withOneMore } from '~/work/part-rows'
 import { recordWork } from '~/work/record.server'
+import { recordLabels } from '~/work/words'
+import { toRecordSchema } from '~/work/work.schema'
 import type { Route } from './+types/$code.record'
 
 export const meta: Route.MetaFunction = () => [{ title: 'Record work · Cragfettle' }]
@@ -38,20 +37,17 @@ async function requireJob({
 }: Pick<Route.LoaderArgs, 'request' | 'params' | 'context'>) {
   const db = context.get(databaseContext)
   const viewer = requirePerson(context.get(viewerContext), request)
-  const code = parseCode(params.code)
-  const order = code === null ? null : await findOrder(db, viewer, code)
-  if (order === null) throw notFound('No order of your organisation carries this code.')
-  requireCan(viewer, 'work:record', await requireCragSubject(db, order.cragId), { seen: true })
+  const { order, subject } = await requireOrderOf(db, viewer, params.code)
+  requireCan(viewer, 'work:record', subject, { seen: true })
   const now = context.get(clockContext)()
-  return { db, viewer, order, now, today: toDay(now, order.timeZone) }
+  const anchorId = order.hazards[0]?.anchorId ?? null
+  const there = anchorId === null ? [] : await listInPlace(db, anchorId)
+  return { db, viewer, order, now, there, today: toDay(now, order.timeZone) }
 }
 
 export async function loader(args: Route.LoaderArgs) {
-  const { db, viewer, order, today } = await requireJob(args)
-  const anchorId = order.hazards[0]?.anchorId
-  const there =
-    anchorId == null ? [] : (await listParts(db, anchorId)).filter(part => part.removedOn === null)
-  const [needed] = await listNeededParts(db, order.id)
+  const { db, viewer, order, there, today } = await requireJob(args)
+  const before = (await findRecord(db, order.id))?.fitted ?? []
   return {
     order: {
       code: order.code,
@@ -59,13 +55,24 @@ export async function loader(args: Route.LoaderArgs) {
       state: order.state,
       mine: order.workerId === viewer.person.id,
     },
-    parts: there.map(part => ({ id: part.id, words: formatPart(part) })),
-    worn: order.hazards[0]?.partId ?? '',
-    needed: needed ?? null,
+    choices: toPartChoices(there),
+    preset: toPresetRows({
+      needed: await listNeededParts(db, order.id),
+      before: before.flatMap(({ kind, material, ...part }) =>
+        kind === null ? [] : [{ ...part, kind, material: material ?? ('unknown' as const) }],
+      ),
+      there,
+      faulty: order.hazards[0]?.partId ?? null,
+    }),
+    again: before.length > 0,
     today,
     clientKey: randomBytes(24).toString('base64url'),
   }
 }
+
+/** The form as it was sent, its photos kept, with room for one more part. */
+const toMore = ({ typed, staged, refused }: PhotoForm) =>
+  data<PhotoFormAnswer>({ errors: {}, typed: withOneMore(typed), staged, refused })
 
 export async function action(args: Route.ActionArgs) {
   const { context } = args
@@ -77,43 +84,20 @@ export async function action(args: Route.ActionArgs) {
     now: context.get(clockContext)(),
   })
   return await keepTyped(form.typed, async () => {
-    const { db, viewer, order, now, today } = await requireJob(args)
-    const parsed = parseForm(toRecordSchema({ today, photos: form.staged.length }), form.data)
+    const { db, viewer, order, now, there, today } = await requireJob(args)
+    if (form.data.get('do') === 'more') return toMore(form)
+    const ids = there.map(part => part.id)
+    const schema = toRecordSchema({ today, photos: form.staged.length, there: ids })
+    const parsed = parseForm(schema, form.data)
     if (!parsed.ok) return form.invalid(parsed.errors)
     if (form.refused.length > 0) return form.invalid({})
-    const {
-      partKind,
-      partMaterial,
-      partSize,
-      partSide,
-      partMarking,
-      replaces,
-      photo: _,
-      ...record
-    } = parsed.value
-    const side = partSide ?? null
+    const { minutes = null, words = null, noPhotoReason = null, ...record } = parsed.value
     const done = await recordWork(db, {
       orderId: order.id,
-      clientKey: record.clientKey,
-      doneOn: record.doneOn,
-      minutes: record.minutes ?? null,
-      words: record.words ?? null,
-      noPhotoReason: record.noPhotoReason ?? null,
+      ...record,
+      ...{ minutes, words, noPhotoReason },
       photoKeys: form.staged.map(one => one.key),
       stagedBy: viewer.sessionHash,
-      fitted:
-        partKind === undefined
-          ? []
-          : [
-              {
-                replaces: replaces ?? null,
-                side,
-                kind: partKind,
-                material: partMaterial!,
-                sizeMm: partSize ?? null,
-                marking: partMarking ?? null,
-              },
-            ],
       who: viewer.person.name,
       act: toAct(now, { kind: 'person', personId: viewer.person.id, organisationId: order.organisationId }),
       appUrl: context.get(settingsContext).appUrl,
@@ -125,7 +109,7 @@ export async function action(args: Route.ActionArgs) {
 }
 
 export default function RecordWork({ loaderData, actionData }: Route.ComponentProps) {
-  const { order, parts, worn, needed, today, clientKey } = loaderData
+  const { order, choices, preset, again, today, clientKey } = loaderData
   const busy = useNavigation().state === 'submitting'
   const typed = actionData?.typed ?? {}
   const errors = actionData?.errors ?? {}
@@ -148,17 +132,18 @@ export default function RecordWork({ loaderData, actionData }: Route.ComponentPr
       ) : (
         <Form method="post" noValidate encType="multipart/form-data" className="mt-5 grid max-w-[62ch] gap-5">
           <FormErrors errors={errors} reason={actionData?.reason} also={actionData?.refused} />
+          <FirstButton />
           <input type="hidden" name="clientKey" value={value('clientKey', clientKey)} />
           <div className="grid gap-5 sm:grid-cols-2">
             <DateField
-              label="Done on"
+              label={recordLabels.doneOn}
               name="doneOn"
               max={today}
               defaultValue={value('doneOn', today)}
               error={errors.doneOn}
             />
             <Field
-              label="Minutes on the wall"
+              label={recordLabels.minutes}
               name="minutes"
               inputMode="numeric"
               defaultValue={value('minutes')}
@@ -166,26 +151,14 @@ export default function RecordWork({ loaderData, actionData }: Route.ComponentPr
             />
           </div>
           <h2 className="text-1 font-semibold">What was fitted</h2>
-          <PartFields typed={typed} errors={errors} preset={needed ?? undefined} none="nothing fitted" />
-          <Select
-            label="In the place of"
-            name="replaces"
-            defaultValue={value('replaces', worn)}
-            options={[
-              { value: '', label: 'nothing, it is new' },
-              ...parts.map(part => ({ value: part.id, label: part.words })),
-            ]}
-            error={errors.replaces}
-          />
-          <Field
-            label="Stamped on it"
-            hint="If you can read it, for example EN 959"
-            name="partMarking"
-            defaultValue={value('partMarking')}
-            error={errors.partMarking}
-          />
+          {again && (
+            <p className="text-s text-stone">
+              All that this order has put there, also what was recorded before the work came back.
+            </p>
+          )}
+          <PartRows name="fitted" {...{ typed, errors, preset, choices, busy }} none="nothing fitted" />
           <TextArea
-            label="In your words"
+            label={recordLabels.words}
             name="words"
             rows={3}
             defaultValue={value('words')}
@@ -197,7 +170,7 @@ export default function RecordWork({ loaderData, actionData }: Route.ComponentPr
             hint="At least one of the finished work. It may be shown to who reported it; leave faces out."
           />
           <Field
-            label="No photo? Say why"
+            label={recordLabels.noPhotoReason}
             name="noPhotoReason"
             defaultValue={value('noPhotoReason')}
             error={errors.noPhotoReason}

@@ -1,7 +1,6 @@
 import { redirect, useNavigation } from 'react-router'
-import { findConsent, requireCragSubject } from '~/crags/crags.server'
-import { formatPart } from '~/crags/part'
-import { formatCode, parseCode, toSlug } from '~/lib/code'
+import { findConsent } from '~/crags/crags.server'
+import { formatCode, toSlug } from '~/lib/code'
 import { requireCan, requirePerson } from '~/people/guards.server'
 import { can } from '~/people/viewer'
 import { viewerContext } from '~/people/viewer-context'
@@ -12,22 +11,24 @@ import { toReportLinks } from '~/reports/links.server'
 import { listPhotos } from '~/reports/photos.server'
 import { Page } from '~/ui/page'
 import { Refused } from '~/ui/refused'
-import { formatDay, formatMoment, formatZone } from '~/ui/when'
+import { formatMoment, formatZone } from '~/ui/when'
 import { clockContext, databaseContext, settingsContext, wakeContext } from '~/web/context'
 import { parseForm, readForm, toTyped } from '~/web/forms.server'
 import { keepTyped } from '~/web/keep-typed.server'
-import { invalid, notFound, refuse } from '~/web/responses'
+import { invalid, refuse } from '~/web/responses'
 import { closeOrder } from '~/work/close.server'
-import { Fact, JobFacts } from '~/work/components/job-facts'
+import { JobFacts } from '~/work/components/job-facts'
+import { OfferList } from '~/work/components/offer-list'
 import { OrderMoves } from '~/work/components/order-moves'
+import { OrderRecord } from '~/work/components/order-record'
 import { WorkCaution } from '~/work/components/work-caution'
+import { requireOrderOf } from '~/work/guards.server'
 import { cancelOrder, handBack } from '~/work/hand-back.server'
 import { offerOrder } from '~/work/offer.server'
-import { orderStateWords } from '~/work/order'
-import { closeSchema, offerSchema, wordsSchema } from '~/work/order.schema'
-import { findRecord, listNeededParts, listOffers } from '~/work/order-details.server'
-import { findOrder } from '~/work/orders.server'
-import { checkerWords, checkMethodWords, offerStateWords } from '~/work/words'
+import { canMoveOrder, type OrderState, orderStateWords } from '~/work/order'
+import { offerSchema, wordsSchema } from '~/work/order.schema'
+import { findRecord, listNeededParts, listOffers, listRecorders } from '~/work/order-details.server'
+import { closeSchema } from '~/work/work.schema'
 import { listRebolters } from '~/work/workers.server'
 import type { Route } from './+types/$code'
 
@@ -42,40 +43,37 @@ async function requireOrder({
 }: Pick<Route.LoaderArgs, 'request' | 'params' | 'context'>) {
   const db = context.get(databaseContext)
   const viewer = requirePerson(context.get(viewerContext), request)
-  const code = parseCode(params.code)
-  const order = code === null ? null : await findOrder(db, viewer, code)
-  if (order === null) throw notFound('No order of your organisation carries this code.')
-  const subject = await requireCragSubject(db, order.cragId)
-  requireCan(viewer, 'order:see', subject, { seen: false })
-  return { db, viewer, order, subject }
+  return { db, viewer, ...(await requireOrderOf(db, viewer, params.code)) }
 }
 
 export async function loader(args: Route.LoaderArgs) {
   const { db, viewer, order, subject } = await requireOrder(args)
   const record = await findRecord(db, order.id)
-  const manages = can(viewer, 'order:manage', subject)
+  const recorders = await listRecorders(db, order.id)
+  const mine = order.workerId === viewer.person.id
+  const canMove = (to: OrderState) => canMoveOrder(order.state, to, action => can(viewer, action, subject))
+  const may = {
+    offer: canMove('offered'),
+    record: canMove('done') && mine,
+    check: canMove('checked') && !recorders.includes(viewer.person.id) && record !== null,
+    close: canMove('closed'),
+    cancel: canMove('cancelled'),
+  }
   return {
     order,
     needed: await listNeededParts(db, order.id),
     consent: (await findConsent(db, order.cragId))?.conditions ?? null,
     offers: await listOffers(db, order.id),
-    rebolters: manages && order.state === 'draft' ? await listRebolters(db, order.organisationId) : [],
+    rebolters: may.offer ? await listRebolters(db, order.organisationId) : [],
     record,
     photos: record === null ? [] : await listPhotos(db, { workRecordIds: [record.id] }),
     history: (await listActivities(db, [order.id], { publicOnly: false })).map(line => ({
       id: line.id,
       at: line.at,
       words: formatActivity(line),
+      said: typeof line.details?.words === 'string' ? line.details.words : null,
     })),
-    may: {
-      manage: manages,
-      record: order.state === 'accepted' && order.workerId === viewer.person.id,
-      check:
-        order.state === 'done' &&
-        record !== null &&
-        record.by !== viewer.person.id &&
-        can(viewer, 'check:make', subject),
-    },
+    may,
   }
 }
 
@@ -141,41 +139,11 @@ export default function OrderPage({ loaderData, actionData }: Route.ComponentPro
         <div>
           <JobFacts job={order} needed={needed} consent={consent} />
           <WorkCaution />
-          {record !== null && (
-            <section className="mt-8" aria-labelledby="record">
-              <h2 id="record" className="text-1 font-semibold">
-                What was done
-              </h2>
-              <dl className="mt-2 border-b border-rule">
-                <Fact word="Done">{`${formatDay(record.doneOn)}, ${record.name}${record.minutes ? `, ${record.minutes} min` : ''}`}</Fact>
-                <Fact word="Fitted">
-                  {record.fitted.flatMap(part =>
-                    part.kind === null
-                      ? []
-                      : [
-                          <div key={part.kind}>
-                            {formatPart({ ...part, kind: part.kind, material: part.material ?? 'unknown' })}
-                          </div>,
-                        ],
-                  )}
-                  {record.fitted.every(part => part.kind === null) && 'nothing'}
-                </Fact>
-                {record.words && <Fact word="Words">{record.words}</Fact>}
-                {record.noPhotoReason && <Fact word="No photo">{record.noPhotoReason}</Fact>}
-                {record.checks.map(check => (
-                  <Fact key={check.at.getTime()} word="Checked">
-                    {`${check.outcome === 'good' ? 'in order' : 'returned'}, ${checkMethodWords[check.how]}, ${check.name} (${checkerWords[check.whoKind]})`}
-                    {check.words && <div>{check.words}</div>}
-                  </Fact>
-                ))}
-              </dl>
-            </section>
-          )}
+          {record !== null && <OrderRecord record={record} photos={photos} timeZone={order.timeZone} />}
         </div>
         <div>
           <OrderMoves
             code={order.code}
-            state={order.state}
             may={may}
             rebolters={rebolters.map(({ id, name }) => ({ id, name }))}
             photos={photos}
@@ -183,28 +151,16 @@ export default function OrderPage({ loaderData, actionData }: Route.ComponentPro
             typed={actionData?.typed ?? {}}
             busy={busy}
           />
-          {offers.length > 0 && (
-            <>
-              <h2 className="mt-8 text-1 font-semibold">Offers</h2>
-              <ul className="mt-2 border-t border-slate">
-                {offers.map(offer => (
-                  <li key={offer.id} className="border-b border-rule py-2">
-                    {`${offer.name}: ${offerStateWords[offer.state]}`}
-                    {offer.state === 'sent' && (
-                      <span className="text-stone">{`, until ${formatMoment(offer.expiresAt, order.timeZone)}`}</span>
-                    )}
-                    {offer.words && <div className="text-stone">{offer.words}</div>}
-                  </li>
-                ))}
-              </ul>
-            </>
-          )}
+          <OfferList offers={offers} timeZone={order.timeZone} />
           <h2 className="mt-8 text-1 font-semibold">History</h2>
           <ul className="mt-2 border-t border-slate">
             {history.map(line => (
               <li key={line.id} className="flex gap-4 border-b border-rule py-2">
                 <span className="w-40 shrink-0 text-stone">{formatMoment(line.at, order.timeZone)}</span>
-                <span>{line.words}</span>
+                <span>
+                  {line.words}
+                  {line.said && <span className="block text-stone">{`“${line.said}”`}</span>}
+                </span>
               </li>
             ))}
           </ul>

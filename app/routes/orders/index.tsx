@@ -32,7 +32,11 @@ export async function loader({ request, context }: Route.LoaderArgs) {
 /** The ledger of work: orders under their state. */
 export default function Orders({ loaderData }: Route.ComponentProps) {
   return (
-    <Page small title="Work" lead={`${loaderData.count} orders under way`}>
+    <Page
+      small
+      title="Work"
+      lead={`${loaderData.count} ${loaderData.count === 1 ? 'order' : 'orders'} under way`}
+    >
       {loaderData.states.length === 0 && (
         <Empty title="No order yet">
           Orders to mend hazards stand here under their state. A coordinator makes one from a hazard’s page.

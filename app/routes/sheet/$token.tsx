@@ -14,7 +14,9 @@ import { WorkCaution } from '~/work/components/work-caution'
 import { orderStateWords } from '~/work/order'
 import { listNeededParts } from '~/work/order-details.server'
 import { findOrderById } from '~/work/orders.server'
+import { mostRows } from '~/work/part-rows'
 import { findSheetOrder } from '~/work/sheets.server'
+import { recordLabels } from '~/work/words'
 import type { Route } from './+types/$token'
 
 export const meta: Route.MetaFunction = () => [
@@ -68,19 +70,20 @@ export async function loader({ params, context }: Route.LoaderArgs) {
   }
 }
 
-const blanks = [
-  'Done on',
-  'Minutes on the wall',
-  'Fitted: part, material, bar',
-  'In the place of',
-  'Stamped on it',
-  'In your words',
-  'Photo taken, or why not',
-]
+/** The boxes of the record's form, to be written by hand: those of each part it needs. */
+function toBlanks(parts: number): string[] {
+  const { doneOn, minutes, kind, material, sizeMm, replaces, marking, words, noPhotoReason } = recordLabels
+  const part = [kind, material, sizeMm, replaces, marking]
+  const rows = Array.from({ length: Math.min(parts, mostRows) }, (_, index) =>
+    part.map(word => (parts === 1 ? word : `Part ${index + 1}: ${word.toLowerCase()}`)),
+  )
+  return [doneOn, minutes, ...rows.flat(), words, 'Photo taken', noPhotoReason]
+}
 
 /** The sheet of an accepted job: to print, to take along, to write on; it changes nothing. */
 export default function Sheet({ loaderData }: Route.ComponentProps) {
   const { order, needed, consent, line } = loaderData
+  const pieces = needed.reduce((sum, part) => sum + part.quantity, 0)
   return (
     <Page title={order.title} lead={`Job sheet, ${formatCode(order.code)}`}>
       <JobFacts job={order} needed={needed} consent={consent} />
@@ -92,7 +95,7 @@ export default function Sheet({ loaderData }: Route.ComponentProps) {
       )}
       <h2 className="mt-8 text-1 font-semibold">To fill in</h2>
       <dl className="mt-2 max-w-[68ch] border-b border-rule">
-        {blanks.map(word => (
+        {toBlanks(Math.max(1, pieces)).map(word => (
           <Fact key={word} word={word}>
             <span className="block h-6" />
           </Fact>

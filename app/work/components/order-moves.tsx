@@ -2,12 +2,11 @@ import { Form } from 'react-router'
 import { Button, ButtonLink } from '~/ui/button'
 import { Select, TextArea } from '~/ui/field'
 import { FormErrors } from '~/ui/form-errors'
-import type { OrderState } from '../order'
 
 interface Props {
   code: string
-  state: OrderState
-  may: { manage: boolean; record: boolean; check: boolean }
+  /** what the table of moves and the viewer's roles allow */
+  may: { offer: boolean; record: boolean; check: boolean; close: boolean; cancel: boolean }
   rebolters: { id: string; name: string }[]
   photos: { storageKey: string; public: boolean }[]
   errors: Record<string, string>
@@ -17,11 +16,11 @@ interface Props {
 
 /** What can be done with an order next, and only that. */
 export function OrderMoves(props: Props) {
-  const { code, state, may, errors, typed, busy } = props
+  const { code, may, errors, typed, busy } = props
   return (
     <section aria-label="What is next" className="mt-5">
       <FormErrors errors={errors} />
-      {may.manage && state === 'draft' && <OfferForm {...props} />}
+      {may.offer && <OfferForm {...props} />}
       {may.record && (
         <>
           <ButtonLink to={`/orders/${code}/record`}>Record work</ButtonLink>
@@ -45,8 +44,8 @@ export function OrderMoves(props: Props) {
         </>
       )}
       {may.check && <ButtonLink to={`/orders/${code}/check`}>Check the work</ButtonLink>}
-      {may.manage && state === 'checked' && <CloseForm {...props} />}
-      {may.manage && ['draft', 'offered', 'accepted'].includes(state) && (
+      {may.close && <CloseForm {...props} />}
+      {may.cancel && (
         <Form method="post" noValidate className="mt-5">
           <Button kind="danger" name="do" value="cancel" pending={busy}>
             Cancel order

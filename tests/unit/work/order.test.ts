@@ -1,84 +1,99 @@
-import { describe, expect, it, test } from 'vitest'
-import { consentStates } from '~/crags/crag'
-import { findMove } from '~/lib/moves'
-import { rules } from '~/people/permission'
-import type { Role } from '~/people/role'
+import { describe, expect, it } from 'vitest'
+import type { Action } from '~/people/permission'
 import { can, type Viewer } from '~/people/viewer'
+import { isBonded } from '~/work/bonded'
 import { findConsentFault } from '~/work/consent'
-import { liveStates, type OrderState, offerStates, orderMoves, orderStates } from '~/work/order'
+import { toUsualJob } from '~/work/job'
+import { canMoveOrder, liveStates, type OrderState, orderMoves, orderStates } from '~/work/order'
 import { toOrderSubject } from '~/work/subject'
-import { answeredWords } from '~/work/words'
 
-/** Where an order may go, written out by hand from “How things move” of the product. */
-const mayGo: Record<OrderState, OrderState[]> = {
-  draft: ['offered', 'cancelled'],
-  offered: ['accepted', 'draft', 'cancelled'],
-  accepted: ['draft', 'done', 'cancelled'],
-  done: ['checked', 'accepted'],
-  checked: ['closed'],
-  closed: [],
-  cancelled: [],
-}
+const everything = () => true
+const only = (action: Action) => (asked: Action) => asked === action
+const nextOf = (from: OrderState, may: (action: Action) => boolean) =>
+  orderStates.filter(to => canMoveOrder(from, to, may))
 
-const pairs = orderStates.flatMap(from => orderStates.map(to => [from, to] as const))
-
-test.each(pairs)('an order that is %s goes to %s only where the product says so', (from, to) => {
-  expect(findMove(orderMoves, from, to) !== null).toBe(mayGo[from].includes(to))
-})
-
-test('every move of an order is the system’s or asks for an action of the permission table', () => {
-  for (const { may } of orderMoves) expect(may === 'system' || may in rules).toBe(true)
-})
-
-describe('Consent', () => {
-  it.each(consentStates)('%s without a reason stops work only where it is disputed or unknown', state => {
-    expect(findConsentFault(state, null) !== null).toBe(state === 'disputed' || state === 'unknown')
+describe('An order', () => {
+  it('that is closed or cancelled stays so', () => {
+    expect(nextOf('closed', everything)).toEqual([])
+    expect(nextOf('cancelled', everything)).toEqual([])
   })
 
-  it('unknown is got over by a written reason, a dispute is not', () => {
-    expect(findConsentFault('unknown', 'The owner cannot be found.')).toBeNull()
-    expect(findConsentFault('disputed', 'The owner cannot be found.')).toMatch(/disputes/)
+  it('can be cancelled only before its work is done', () => {
+    expect(orderStates.filter(from => canMoveOrder(from, 'cancelled', everything))).toEqual([
+      'draft',
+      'offered',
+      'accepted',
+    ])
+  })
+
+  it('is offered, closed and cancelled by its coordinator, never by whoever mends or checks', () => {
+    expect(nextOf('checked', only('order:manage'))).toEqual(['closed'])
+    expect(nextOf('checked', only('work:record'))).toEqual([])
+    expect(nextOf('accepted', only('work:record'))).toEqual(['draft', 'done'])
+    expect(nextOf('done', only('check:make'))).toEqual(['accepted', 'checked'])
+  })
+
+  it('falls back to a draft by itself when its offer ends, at nobody’s press', () => {
+    expect(canMoveOrder('offered', 'draft', everything)).toBe(false)
+    expect(orderMoves).toContainEqual(
+      expect.objectContaining({ from: 'offered', to: 'draft', may: 'system' }),
+    )
+  })
+
+  it('is under way until it is closed or cancelled', () => {
+    expect(orderStates.filter(state => !(liveStates as readonly string[]).includes(state))).toEqual([
+      'closed',
+      'cancelled',
+    ])
   })
 })
 
-describe('An order of one organisation at a crag that two look after', () => {
+describe('The owner’s word', () => {
+  it('stops work while disputed, whatever the reason', () => {
+    expect(findConsentFault('disputed', 'It is urgent.')).toMatch(/disputes/)
+  })
+
+  it('is replaced by a written reason only where it is not known', () => {
+    expect(findConsentFault('unknown', null)).toMatch(/reason/)
+    expect(findConsentFault('unknown', 'Nobody is found.')).toBeNull()
+    expect(findConsentFault('given', null)).toBeNull()
+    expect(findConsentFault('not_needed', null)).toBeNull()
+  })
+})
+
+describe('A role counts for an order', () => {
+  const membership = (organisationId: string, role: 'coordinator' | 'rebolter') => ({
+    ...{ organisationId, organisationName: organisationId, roles: [role] },
+  })
+  const viewer: Viewer = {
+    person: { id: 'p', name: 'Bo', email: 'bo@keld.example', over18: true },
+    memberships: [membership('keld', 'coordinator'), membership('harrow', 'rebolter')],
+  }
   const crag = {
     sensitive: 'open' as const,
     organisations: ['keld', 'harrow'].map(organisationId => ({
-      organisationId,
-      remit: 'rebolting' as const,
-      lead: organisationId === 'keld',
+      ...{ organisationId, remit: 'rebolting' as const, lead: true },
     })),
   }
-  const viewer = (held: Record<string, Role[]>): Viewer => ({
-    person: { id: 'me', name: 'Mara Quill', email: 'mara@example.org', over18: true },
-    memberships: Object.entries(held).map(([organisationId, roles]) => ({
-      organisationId,
-      organisationName: organisationId,
-      roles,
-    })),
-  })
 
-  it('is managed by its own coordinator', () => {
-    const subject = toOrderSubject({ crag }, 'keld')
-    expect(can(viewer({ keld: ['coordinator'] }), 'order:manage', subject)).toBe(true)
-    expect(can(viewer({ harrow: ['coordinator'] }), 'order:manage', subject)).toBe(false)
-  })
-
-  it('is not managed by its own rebolter who coordinates for the other', () => {
-    const both = viewer({ keld: ['rebolter'], harrow: ['coordinator'] })
-    expect(can(both, 'order:manage', { crag })).toBe(true)
-    expect(can(both, 'order:manage', toOrderSubject({ crag }, 'keld'))).toBe(false)
-    expect(can(both, 'order:see', toOrderSubject({ crag }, 'keld'))).toBe(true)
+  it('only in the organisation the order belongs to', () => {
+    expect(can(viewer, 'order:manage', toOrderSubject({ crag }, 'keld'))).toBe(true)
+    expect(can(viewer, 'order:manage', toOrderSubject({ crag }, 'harrow'))).toBe(false)
+    expect(can(viewer, 'work:record', toOrderSubject({ crag }, 'harrow'))).toBe(true)
+    expect(can(viewer, 'work:record', toOrderSubject({ crag }, 'elsewhere'))).toBe(false)
   })
 })
 
-test('an offer that can no longer be answered says something else for each way it ended', () => {
-  const ended = offerStates.filter(state => state !== 'sent')
-  expect(new Set(ended.map(state => answeredWords[state])).size).toBe(ended.length)
-})
+describe('Kinds of job and part', () => {
+  it('begin with what the way of failing usually asks for', () => {
+    expect(toUsualJob('pulls_out', 'bolt')).toBe('replace_bolt')
+    expect(toUsualJob('releases_rope', 'lower_off')).toBe('replace_ring')
+    expect(toUsualJob('cuts_rope', 'bolt')).toBe('replace_connector')
+    expect(toUsualJob('breaks', 'bolt')).toBe('look_closely')
+  })
 
-test('a hazard’s order is under way in every state that it can still leave', () => {
-  const canLeave = orderStates.filter(from => orderMoves.some(move => move.from === from))
-  expect([...liveStates].sort()).toEqual(canLeave.sort())
+  it('know which bolts resin holds', () => {
+    expect((['bonded_eye', 'bonded_staple', 'bonded_stud'] as const).every(isBonded)).toBe(true)
+    expect((['wedge_bolt', 'ring', 'resin'] as const).some(isBonded)).toBe(false)
+  })
 })
