@@ -7,6 +7,7 @@ import { inTransaction } from './db/transaction.server'
 import { toDay } from './lib/dates'
 import { mailStep } from './mail/deliveries.server'
 import { createSender } from './mail/sender.server'
+import { expireNotices } from './notices/expire.server'
 import { signInSweep } from './people/sign-in.server'
 import { toAct } from './record/acts.server'
 import { type Step, startWorker } from './record/worker.server'
@@ -65,7 +66,13 @@ const offersStep = (appUrl: string): Step => ({
   run: async ({ db, clock }) => await expireOffers(db, toAct(clock(), system), appUrl),
 })
 
-/** Everything done by the clock or after a command: mails, lapses, offers that run out, sweeping. */
+/** Notices that reach their end: what they warned of is open again. */
+const noticesStep: Step = {
+  name: 'notices',
+  run: async ({ db, clock }) => await expireNotices(db, toAct(clock(), system)),
+}
+
+/** Everything done by the clock or after a command: mails, lapses, offers and notices that run out, sweeping. */
 export function startWork(given: { db: Database; settings: Settings; clock: () => Date }) {
   const { db, settings, clock } = given
   const sender = createSender({
@@ -80,6 +87,7 @@ export function startWork(given: { db: Database; settings: Settings; clock: () =
     steps: [
       mailStep(sender, failure => log.warn(failure, 'a mail could not leave')),
       seldom(minute, offersStep(settings.appUrl)),
+      seldom(minute, noticesStep),
       seldom(minute, lapseStep),
       seldom(10 * minute, sweepStep(settings.photoDir)),
       seldom(60 * minute, signInSweep),

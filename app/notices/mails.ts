@@ -29,18 +29,19 @@ export function toReviewMail({ id, code, headline, words, officer, appUrl }: Tol
       heading: 'A first warning was published',
       paragraphs: [
         words,
-        `It stands for seven days and while its hazard is open. Until you confirm it, it is marked “not reviewed” (${formatCode(code)}).`,
+        `It stands for seven days and while its hazard is open. Until you confirm it, it is marked “not reviewed” (${formatCode(code)}). Its page also leads to writing a notice in other words, which takes its place.`,
       ],
-      button: { words: 'Confirm or withdraw it', url: `${appUrl}/notices/${code}` },
+      button: { words: 'Confirm, revise or withdraw it', url: `${appUrl}/notices/${code}` },
     }),
   }
 }
 
-/** To an access officer: what a notice warns of is mended; does it still stand? */
-export function toStillTrueMail({ id, code, headline, officer, appUrl }: Omit<Told, 'words'>): Message {
+/** To an access officer: what a notice warns of is mended; does it still stand? Asked once each time that happens. */
+export function toStillTrueMail(told: Omit<Told, 'words'> & { askedAt: Date }): Message {
+  const { id, code, headline, officer, appUrl, askedAt } = told
   return {
     kind: 'notice-still-true',
-    dedupeKey: `notice-still-true:${id}:${officer.id}`,
+    dedupeKey: `notice-still-true:${id}:${officer.id}:${askedAt.getTime()}`,
     to: officer.email,
     personId: officer.id,
     thread: `notice-${id}`,

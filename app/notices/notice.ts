@@ -1,6 +1,6 @@
 import type { Move } from '~/lib/moves'
 import type { Action } from '~/people/permission'
-import { can, type Subject, type Viewer } from '~/people/viewer'
+import { can, type Membership, type Subject, type Viewer } from '~/people/viewer'
 
 export const noticeKinds = [
   'first_warning',
@@ -47,4 +47,13 @@ export function canWithdraw(
   if (can(viewer, 'notice:manage', subject)) return true
   const own = notice.publishedBy !== null && notice.publishedBy === viewer.person?.id
   return notice.kind === 'first_warning' && own && can(viewer, 'warning:withdraw', subject)
+}
+
+/** The membership in whose organisation's name the viewer does this at a crag, or null when they may not. */
+export function findPublisher(
+  viewer: Viewer,
+  action: 'warning:publish' | 'notice:manage',
+  subject: Subject,
+): Membership | null {
+  return viewer.memberships.find(one => can({ ...viewer, memberships: [one] }, action, subject)) ?? null
 }

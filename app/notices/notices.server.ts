@@ -3,8 +3,9 @@ import { visibleCrags } from '~/crags/visible.server'
 import type { Queryable } from '~/db/client.server'
 import { holdingRevision, isAtCrag, isInForceAt } from '~/db/notices-in-force'
 import { anchors, areas, climbAnchors, climbs, crags } from '~/db/schema/crags'
-import { noticePlaces, noticeRevisions, notices } from '~/db/schema/notices'
+import { noticeHazards, noticePlaces, noticeRevisions, notices } from '~/db/schema/notices'
 import { organisations } from '~/db/schema/people'
+import { hazards } from '~/db/schema/reports'
 import type { Viewer } from '~/people/viewer'
 import type { NoticeKind } from './notice'
 
@@ -35,7 +36,9 @@ const columns = {
   timeZone: areas.timeZone,
   climbCode: climbs.code,
   climbName: climbs.name,
+  anchorId: anchors.id,
   anchorCode: anchors.code,
+  whileOpen: noticeRevisions.whileOpen,
 }
 
 /** A notice with its holding revision and its one place; the crag is found through whatever the place is. */
@@ -58,18 +61,19 @@ type NoticeRow = Awaited<ReturnType<ReturnType<typeof selectNotices>['limit']>>[
 export type ShownNotice = Omit<NoticeRow, 'publishedBy'>
 
 /** Strongest first: what the law and the owner say, then please do not climb, hazards, first warnings, works. */
-const strength: readonly NoticeKind[] = [
+const strength = [
   'closed_in_law',
   'owner_forbids',
   'please_do_not_climb',
   'hazard',
   'first_warning',
   'works',
-]
+] as const satisfies readonly NoticeKind[]
 
-const byStrength = (a: ShownNotice, b: ShownNotice) =>
-  strength.indexOf(a.kind) - strength.indexOf(b.kind) ||
-  (b.publishedAt?.getTime() ?? 0) - (a.publishedAt?.getTime() ?? 0)
+const byStrength = sql`field(${notices.kind}, ${sql.join(
+  strength.map(kind => sql`${kind}`),
+  sql`, `,
+)})`
 
 /** The place asked about, as a condition on `notice_places`; everywhere when nothing is asked. */
 function atPlace(given: { cragId?: string; climbId?: string; anchorIds?: string[] }): SQL | undefined {
@@ -86,21 +90,23 @@ function atPlace(given: { cragId?: string; climbId?: string; anchorIds?: string[
   )
 }
 
+/** The most notices that one page shows. */
+export const mostNotices = 200
+
 /**
- * The notices in force that a viewer may see, strongest first, at most 200: of a crag and everything in it, of a climb
- * and its points, of fixed points, or all.
+ * The notices in force that a viewer may see, strongest first, then newest, at most `limit`: of a crag and everything
+ * in it, of a climb and its points, of fixed points, or all.
  */
 export async function noticesInForce(
   db: Queryable,
   viewer: Viewer,
-  given: { now: Date; cragId?: string; climbId?: string; anchorIds?: string[] },
+  given: { now: Date; cragId?: string; climbId?: string; anchorIds?: string[]; limit?: number },
 ): Promise<ShownNotice[]> {
   const rows = await selectNotices(db)
     .where(and(isInForceAt(given.now), visibleCrags(viewer), atPlace(given)))
-    .orderBy(asc(notices.id))
-    .limit(200)
-  const once = new Map(rows.map(({ publishedBy: _, ...row }) => [row.id, row]))
-  return [...once.values()].sort(byStrength)
+    .orderBy(byStrength, desc(notices.publishedAt), desc(notices.id))
+    .limit(given.limit ?? mostNotices)
+  return [...new Map(rows.map(({ publishedBy: _, ...row }) => [row.id, row])).values()]
 }
 
 /** The notice of a code if the viewer may see its crag (drafts are nobody's here), else null. */
@@ -111,6 +117,18 @@ export async function findNotice(db: Queryable, viewer: Viewer, code: string): P
     )
     .limit(1)
   return row ?? null
+}
+
+/** The hazards a notice is about, and whether each is open or warned of. */
+export async function listHazardsOf(db: Queryable, noticeId: string) {
+  const rows = await db
+    .select({ code: hazards.code, state: hazards.state })
+    .from(noticeHazards)
+    .innerJoin(hazards, eq(hazards.id, noticeHazards.hazardId))
+    .where(eq(noticeHazards.noticeId, noticeId))
+    .orderBy(asc(hazards.code))
+    .limit(50)
+  return rows.map(row => ({ code: row.code, open: row.state === 'open' || row.state === 'warned' }))
 }
 
 /** Every wording a notice has had, newest first. */

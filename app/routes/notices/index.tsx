@@ -1,7 +1,7 @@
 import { Link } from 'react-router'
 import { toSlug } from '~/lib/code'
 import { formatBy, toLabel } from '~/notices/components/notice-bands'
-import { noticesInForce } from '~/notices/notices.server'
+import { mostNotices, noticesInForce } from '~/notices/notices.server'
 import { viewerContext } from '~/people/viewer-context'
 import { Empty } from '~/ui/empty'
 import { Page } from '~/ui/page'
@@ -15,12 +15,19 @@ export const meta: Route.MetaFunction = () => [
 
 export async function loader({ context }: Route.LoaderArgs) {
   const now = context.get(clockContext)()
-  return { notices: await noticesInForce(context.get(databaseContext), context.get(viewerContext), { now }) }
+  const notices = await noticesInForce(context.get(databaseContext), context.get(viewerContext), { now })
+  return {
+    notices,
+    lead:
+      notices.length < mostNotices
+        ? `${notices.length} in force`
+        : `the ${mostNotices} strongest of those in force`,
+  }
 }
 
-export default function Notices({ loaderData: { notices } }: Route.ComponentProps) {
+export default function Notices({ loaderData: { notices, lead } }: Route.ComponentProps) {
   return (
-    <Page title="Notices" lead={notices.length === 0 ? undefined : `${notices.length} in force`}>
+    <Page title="Notices" lead={notices.length === 0 ? undefined : lead}>
       {notices.length === 0 ? (
         <Empty title="No notice is in force">
           Warnings of gear not to rely on, works and closures stand here while they hold. Their absence says
@@ -40,7 +47,7 @@ export default function Notices({ loaderData: { notices } }: Route.ComponentProp
                 <Link to={`/notices/${notice.code}`} className="font-medium text-slate">
                   {notice.headline}
                 </Link>
-                <p className="max-w-[62ch]" lang={notice.lang}>
+                <p className="max-w-[62ch] whitespace-pre-line" lang={notice.lang}>
                   {notice.words}
                 </p>
                 <p className="text-s text-stone">

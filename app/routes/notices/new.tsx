@@ -2,9 +2,9 @@ import { Form, redirect, useNavigation } from 'react-router'
 import { listClimbsOf } from '~/crags/anchors.server'
 import { requireCragSubject } from '~/crags/crags.server'
 import { parseCode } from '~/lib/code'
-import { addMonths, toDay } from '~/lib/dates'
-import { toFirstWarning } from '~/notices/first-warning'
-import { noticeKindWords, writtenKinds } from '~/notices/notice'
+import { addMonths, toDay, toDayEnd } from '~/lib/dates'
+import { toFirstWarning, toWarnedPlace } from '~/notices/first-warning'
+import { findPublisher, noticeKindWords, writtenKinds } from '~/notices/notice'
 import { toNoticeSchema } from '~/notices/notice.schema'
 import { publishNotice } from '~/notices/publish.server'
 import { requireCan, requirePerson } from '~/people/guards.server'
@@ -16,7 +16,7 @@ import { Button } from '~/ui/button'
 import { DateField, Field, Select, TextArea } from '~/ui/field'
 import { FormErrors } from '~/ui/form-errors'
 import { Page } from '~/ui/page'
-import { clockContext, databaseContext, settingsContext, wakeContext } from '~/web/context'
+import { clockContext, databaseContext, wakeContext } from '~/web/context'
 import { parseForm, readForm, toTyped } from '~/web/forms.server'
 import { keepTyped } from '~/web/keep-typed.server'
 import { invalid, notFound, refuse } from '~/web/responses'
@@ -33,25 +33,20 @@ async function requireHazard({ request, context }: Pick<Route.LoaderArgs, 'reque
   const subject = await requireCragSubject(db, hazard.cragId)
   requireCan(viewer, 'notice:manage', subject, { seen: can(viewer, 'urgency:see', subject) })
   const now = context.get(clockContext)()
-  return { db, viewer, hazard, now, today: toDay(now, hazard.timeZone) }
+  return { db, viewer, hazard, subject, now, today: toDay(now, hazard.timeZone) }
 }
 
 export async function loader(args: Route.LoaderArgs) {
-  const { db, viewer, hazard, today } = await requireHazard(args)
+  const { db, viewer, hazard, subject, today } = await requireHazard(args)
   const climbs = hazard.anchorId === null ? [] : await listClimbsOf(db, hazard.anchorId)
-  const draft = toFirstWarning({
-    kind: hazard.anchorKind ?? 'bolt',
-    mode: hazard.mode,
-    position: hazard.position ?? 'route',
-    climbs: climbs.length > 0 ? climbs.map(climb => climb.name) : [hazard.climbName ?? ''],
-    cragName: hazard.cragName,
-  })
+  const { headline, words } = toFirstWarning(toWarnedPlace(hazard, climbs))
   return {
     hazard: { code: hazard.code, headline: hazard.headline, cragName: hazard.cragName },
     draft: {
       kind: 'hazard',
-      ...draft,
-      decidedByWords: viewer.memberships[0]?.organisationName ?? '',
+      headline,
+      words,
+      decidedByWords: findPublisher(viewer, 'notice:manage', subject)?.organisationName ?? '',
       ground: hazard.headline,
       reviewOn: addMonths(today, 2),
       endsOn: '',
@@ -71,8 +66,7 @@ export async function action(args: Route.ActionArgs) {
       hazardCode: hazard.code,
       viewer,
       act: toAct(now, { kind: 'person', personId: viewer.person.id }),
-      appUrl: args.context.get(settingsContext).appUrl,
-      notice: { ...notice, endsAt: endsOn === undefined ? null : new Date(`${endsOn}T23:59:59Z`) },
+      notice: { ...notice, endsAt: endsOn === undefined ? null : toDayEnd(endsOn, hazard.timeZone) },
     })
     if (!done.ok) return refuse(done.reason, typed)
     args.context.get(wakeContext)()
@@ -116,7 +110,7 @@ export default function NewNotice({ loaderData, actionData }: Route.ComponentPro
           error={errors.decidedByWords}
         />
         <Field label="On what ground" name="ground" defaultValue={value('ground')} error={errors.ground} />
-        <div className="grid gap-5 sm:grid-cols-2">
+        <div className="grid items-start gap-5 sm:grid-cols-2">
           <DateField
             label="Looked at again on"
             name="reviewOn"
