@@ -1,3 +1,4 @@
+import { Link } from 'react-router'
 import { ConditionMark } from '~/crags/components/condition-mark'
 import { conditionWords } from '~/crags/condition-state'
 import { caution } from '~/lib/caution'
@@ -78,18 +79,42 @@ export default function About() {
           <h2 className="text-2 font-semibold">Who sees what</h2>
           <p className="mt-2">
             Everybody sees places, conditions, notices and what was mended, with the organisation and the day.
-            Nobody in public sees who reported, fitted or checked. Words and photos of a report are public
-            only after a coordinator has looked. A photo’s owner keeps it; the organisation may use it in the
-            record and in notices. The place a camera writes into a photo is thrown away. Coordinators of the
-            crag see urgency, its reasons and range, and whom to ask back.
+            Coordinators and access officers of the crag also see urgency, its reasons and its range.
+          </p>
+          <p className="mt-3">
+            Nobody in public sees who reported, fitted or checked. Who reported, and their address, is seen
+            only by coordinators and access officers of the organisations that lead at the crag, to ask back.
+            Words of a report are public only after a coordinator has looked.
+          </p>
+        </section>
+        <section>
+          <h2 className="text-2 font-semibold">Photos</h2>
+          <p className="mt-2">
+            A photo stays its owner’s. Who sends one lets the organisation use it in the record, in notices
+            and on posters. It is public only after a coordinator has looked. The place a camera writes into
+            it is thrown away when it comes in.
+          </p>
+        </section>
+        <section>
+          <h2 className="text-2 font-semibold">Notices</h2>
+          <p className="mt-2">
+            A notice says what not to rely on or where not to climb, whose decision that is and when it is
+            looked at again. A first warning goes out before an access officer has reviewed it and says so.
+            Notices are kept for what is to be mended first or soon: that there is none says nothing about any
+            fixed gear.
           </p>
         </section>
         <section>
           <h2 className="text-2 font-semibold">Reporting</h2>
           <p className="mt-2">
-            No account is needed: choose the route, the fixed point on its line, and say what is wrong. An
-            address lets us ask back and tell you when it is mended. Do not unclip, stay on it or lean out to
-            measure or photograph.
+            No account is needed: <Link to="/report">choose the route</Link>, the fixed point on its line, and
+            say what is wrong. Instead of signing in, leave an address and open the link mailed to it; another
+            link, yours alone, shows what becomes of the report. The address lets us ask back and tell you
+            when it is mended.
+          </p>
+          <p className="mt-3">
+            Do not unclip, stay on it or lean out to measure or photograph. Somebody hurt? Call the emergency
+            number first.
           </p>
         </section>
       </div>
